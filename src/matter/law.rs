@@ -1,0 +1,243 @@
+//! A property over temperature with its exact integral.
+//!
+//! Conduction needs the integral of the conductivity (the heat flux between two temperatures is exact then,
+//! after Kirchhoff 1894), storage the integral of the heat capacity (enthalpy). Both come from one type:
+//! piecewise polynomials, held at their end values outside their range.
+
+/// A property over temperature (K).
+#[derive(Clone, Debug, PartialEq)]
+pub enum Law {
+    /// The same at every temperature.
+    Constant(f64),
+    /// Polynomials between knots; constant outside.
+    Pieces(Pieces),
+}
+
+/// Polynomials between ascending knots.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Pieces {
+    /// Temperatures, K; one more than pieces.
+    knots: Vec<f64>,
+    /// Per piece, coefficients from the constant up in `T - left knot`.
+    coefficients: Vec<Vec<f64>>,
+    /// Integral from the first knot to each knot.
+    integrals: Vec<f64>,
+    /// Value at the last knot, held above it.
+    last: f64,
+}
+
+impl Law {
+    /// Straight lines between points (K, value); ascending, at least two.
+    pub fn table(points: &[(f64, f64)]) -> Self {
+        let pieces = points.windows(2).map(|pair| {
+            let slope = (pair[1].1 - pair[0].1) / (pair[1].0 - pair[0].0);
+            vec![pair[0].1, slope]
+        });
+        let knots = points.iter().map(|point| point.0).collect();
+        Self::Pieces(Pieces::new(knots, pieces.collect()))
+    }
+
+    /// One polynomial in `T - from` between `from` and `to` (K), coefficients from the constant up.
+    pub fn polynomial(from: f64, to: f64, coefficients: Vec<f64>) -> Self {
+        Self::Pieces(Pieces::new(vec![from, to], vec![coefficients]))
+    }
+
+    /// Polynomials in `T - left knot` between ascending knots (K).
+    pub fn pieces(knots: Vec<f64>, coefficients: Vec<Vec<f64>>) -> Self {
+        Self::Pieces(Pieces::new(knots, coefficients))
+    }
+
+    /// The value at a temperature.
+    pub fn value(&self, temperature: f64) -> f64 {
+        match self {
+            Self::Constant(value) => *value,
+            Self::Pieces(pieces) => pieces.value(temperature),
+        }
+    }
+
+    /// The integral over temperature from a fixed reference (0 K for a constant, else the first knot).
+    pub fn integral(&self, temperature: f64) -> f64 {
+        match self {
+            Self::Constant(value) => value * temperature,
+            Self::Pieces(pieces) => pieces.integral(temperature),
+        }
+    }
+
+    /// Product of two laws, held outside the overlap of... each at its own end values.
+    #[must_use]
+    pub fn times(&self, other: &Self) -> Self {
+        match (self, other) {
+            (Self::Constant(a), Self::Constant(b)) => Self::Constant(a * b),
+            (Self::Constant(a), Self::Pieces(pieces)) | (Self::Pieces(pieces), Self::Constant(a)) => {
+                Self::Pieces(pieces.scaled(*a))
+            }
+            (Self::Pieces(a), Self::Pieces(b)) => Self::Pieces(a.times(b)),
+        }
+    }
+
+    /// The same value at every temperature?
+    pub fn constant(&self) -> Option<f64> {
+        match self {
+            Self::Constant(value) => Some(*value),
+            Self::Pieces(_) => None,
+        }
+    }
+
+    /// Lowest value anywhere: exact for tables, sampled finely for higher polynomials.
+    pub fn lowest(&self) -> f64 {
+        match self {
+            Self::Constant(value) => *value,
+            Self::Pieces(pieces) => pieces.lowest(),
+        }
+    }
+}
+
+impl Pieces {
+    fn new(knots: Vec<f64>, coefficients: Vec<Vec<f64>>) -> Self {
+        assert!(
+            knots.len() == coefficients.len() + 1 && knots.windows(2).all(|pair| pair[0] < pair[1]),
+            "knots ascend and enclose the pieces"
+        );
+        let mut integrals = vec![0.0];
+        for (pair, piece) in knots.windows(2).zip(&coefficients) {
+            integrals.push(integrals[integrals.len() - 1] + antiderivative(piece, pair[1] - pair[0]));
+        }
+        let width = knots[knots.len() - 1] - knots[knots.len() - 2];
+        let last = polynomial(&coefficients[coefficients.len() - 1], width);
+        Self { knots, coefficients, integrals, last }
+    }
+
+    /// Number of the piece that holds a temperature between the first and the last knot.
+    fn piece(&self, temperature: f64) -> usize {
+        self.knots.partition_point(|&knot| knot <= temperature).clamp(1, self.coefficients.len()) - 1
+    }
+
+    fn value(&self, temperature: f64) -> f64 {
+        if temperature <= self.knots[0] {
+            return self.coefficients[0][0];
+        }
+        if temperature >= self.knots[self.knots.len() - 1] {
+            return self.last;
+        }
+        let i = self.piece(temperature);
+        polynomial(&self.coefficients[i], temperature - self.knots[i])
+    }
+
+    fn integral(&self, temperature: f64) -> f64 {
+        let (first, top) = (self.knots[0], self.knots[self.knots.len() - 1]);
+        if temperature <= first {
+            return self.coefficients[0][0] * (temperature - first);
+        }
+        if temperature >= top {
+            return self.integrals[self.integrals.len() - 1] + self.last * (temperature - top);
+        }
+        let i = self.piece(temperature);
+        self.integrals[i] + antiderivative(&self.coefficients[i], temperature - self.knots[i])
+    }
+
+    fn scaled(&self, factor: f64) -> Self {
+        let scale = |piece: &Vec<f64>| piece.iter().map(|c| c * factor).collect();
+        Self::new(self.knots.clone(), self.coefficients.iter().map(scale).collect())
+    }
+
+    fn times(&self, other: &Self) -> Self {
+        let mut knots: Vec<f64> = self.knots.iter().chain(&other.knots).copied().collect();
+        knots.sort_by(f64::total_cmp);
+        knots.dedup();
+        let product = |pair: &[f64]| {
+            let middle = 0.5 * (pair[0] + pair[1]);
+            multiply(&self.around(middle, pair[0]), &other.around(middle, pair[0]))
+        };
+        let coefficients = knots.windows(2).map(product).collect();
+        Self::new(knots, coefficients)
+    }
+
+    /// The polynomial that holds at `temperature`, written in `T - origin`.
+    fn around(&self, temperature: f64, origin: f64) -> Vec<f64> {
+        if temperature <= self.knots[0] {
+            return vec![self.coefficients[0][0]];
+        }
+        if temperature >= self.knots[self.knots.len() - 1] {
+            return vec![self.last];
+        }
+        let i = self.piece(temperature);
+        shifted(&self.coefficients[i], origin - self.knots[i])
+    }
+
+    fn lowest(&self) -> f64 {
+        let mut low = self.last;
+        for (pair, piece) in self.knots.windows(2).zip(&self.coefficients) {
+            let samples = if piece.len() <= 2 { 1 } else { 64 };
+            for i in 0..=samples {
+                let x = (pair[1] - pair[0]) * f64::from(i) / f64::from(samples);
+                low = low.min(polynomial(piece, x));
+            }
+        }
+        low
+    }
+}
+
+/// Value of a polynomial, coefficients from the constant up.
+fn polynomial(coefficients: &[f64], x: f64) -> f64 {
+    coefficients.iter().rev().fold(0.0, |sum, c| sum * x + c)
+}
+
+/// Its integral from 0 to x.
+fn antiderivative(coefficients: &[f64], x: f64) -> f64 {
+    coefficients.iter().enumerate().rev().fold(0.0, |sum, (i, c)| sum * x + c / (i + 1) as f64) * x
+}
+
+/// The same polynomial in a variable that begins `by` further on (Horner's scheme, repeated).
+fn shifted(coefficients: &[f64], by: f64) -> Vec<f64> {
+    let mut out = coefficients.to_vec();
+    for i in 0..out.len() {
+        for j in (i..out.len() - 1).rev() {
+            out[j] += by * out[j + 1];
+        }
+    }
+    out
+}
+
+fn multiply(a: &[f64], b: &[f64]) -> Vec<f64> {
+    let mut out = vec![0.0; a.len() + b.len() - 1];
+    for (i, x) in a.iter().enumerate() {
+        for (j, y) in b.iter().enumerate() {
+            out[i + j] += x * y;
+        }
+    }
+    out
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use approx::assert_relative_eq;
+
+    #[test]
+    fn a_table_is_straight_between_points_and_held_outside() {
+        let law = Law::table(&[(300.0, 1.0), (400.0, 3.0), (600.0, 2.0)]);
+        assert_relative_eq!(law.value(350.0), 2.0);
+        assert_relative_eq!(law.value(200.0), 1.0);
+        assert_relative_eq!(law.value(900.0), 2.0);
+        assert_relative_eq!(law.integral(600.0) - law.integral(300.0), 200.0 + 500.0);
+        assert_relative_eq!(law.integral(700.0) - law.integral(600.0), 200.0);
+        assert_relative_eq!(law.integral(300.0) - law.integral(250.0), 50.0);
+    }
+
+    #[test]
+    fn a_product_is_the_product_everywhere_and_integrates_exactly() {
+        let a = Law::table(&[(300.0, 1.0), (400.0, 3.0)]);
+        let b = Law::polynomial(350.0, 500.0, vec![2.0, 0.01, 1e-4]);
+        let both = a.times(&b);
+        let mut sum = 0.0;
+        let steps = 20_000;
+        let width = 300.0 / f64::from(steps);
+        for i in 0..steps {
+            let at = 250.0 + width * (f64::from(i) + 0.5);
+            assert_relative_eq!(both.value(at), a.value(at) * b.value(at), max_relative = 1e-12);
+            sum += both.value(at) * width;
+        }
+        // Midpoint rule: error of the size width² times second derivative, 1e-8 relative.
+        assert_relative_eq!(both.integral(550.0) - both.integral(250.0), sum, max_relative = 1e-7);
+    }
+}

@@ -1,0 +1,5 @@
+//! Material properties over temperature, and the library of materials with their sources.
+
+mod law;
+
+pub use law::Law;

@@ -1,0 +1,10 @@
+//! The file as written: one JSON document, `"stillheat": 1`.
+//!
+//! These types say what a file can say and nothing about whether it can be solved; that is [`crate::item`].
+//! Every key carries its unit in lower case. An uncertain number is an object with `value`, `low`, `high`
+//! in the place of the plain number. The JSON Schema is made from these types (`schema`), the reader that
+//! reports all problems at once is `read`.
+
+mod types;
+
+pub use types::*;
