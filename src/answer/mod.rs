@@ -1,5 +1,18 @@
 //! From a checked item to its answers: ready time, standing time, numerical band, heat balance.
 
+mod cells;
+mod gauge;
+mod history;
+mod march;
 mod report;
+mod resolve;
+mod surroundings;
+mod verdict;
+
+pub use gauge::Gauge;
+pub use history::History;
+pub use march::{Crossing, Ending, March, Orders, march};
 
 pub use report::*;
+pub use resolve::{Resolved, resolve};
+pub use verdict::{Followed, Timed, Verdict, all_of, any_of};
