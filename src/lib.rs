@@ -10,6 +10,7 @@
 
 pub mod answer;
 pub mod conduct;
+pub mod film;
 pub mod item;
 pub mod matter;
 pub mod mesh;
@@ -21,3 +22,42 @@ pub mod units;
 
 #[cfg(target_arch = "wasm32")]
 mod page;
+
+use answer::{Circumstances, Report, Resolved};
+use item::{Checked, Item};
+use problem::{Problem, Trouble};
+use scenario::Scenario;
+
+/// A scenario with its answer.
+#[derive(Clone, Debug)]
+pub struct Solved {
+    /// As written.
+    pub scenario: Scenario,
+    /// As checked.
+    pub checked: Checked,
+    /// The marches behind the answer.
+    pub resolved: Resolved,
+    /// What is said about it.
+    pub report: Report,
+}
+
+/// The whole line: the text of a scenario to its answer.
+///
+/// # Errors
+/// Everything that is wrong with the text, each problem with its place.
+pub fn solve(text: &str) -> Result<Solved, Vec<Problem>> {
+    let scenario = scenario::read(text)?;
+    let checked = Item::check(&scenario)?;
+    let resolved = answer::resolve(&checked.item).map_err(|error| {
+        let words = format!("the steady state of the earlier surroundings was not found ({error})");
+        vec![Problem::error("/start/steady_before", Trouble::Contradiction { words })]
+    })?;
+    let about = Circumstances {
+        title: checked.title.clone(),
+        clock: checked.clock,
+        warnings: checked.warnings.clone(),
+        by_hand: Vec::new(),
+    };
+    let report = answer::report(&checked.item, &resolved, about);
+    Ok(Solved { scenario, checked, resolved, report })
+}

@@ -8,6 +8,8 @@ mod report;
 mod resolve;
 mod surroundings;
 mod verdict;
+mod words;
+mod write;
 
 pub use gauge::Gauge;
 pub use history::History;
@@ -16,3 +18,4 @@ pub use march::{Crossing, Ending, March, Orders, march};
 pub use report::*;
 pub use resolve::{Resolved, resolve};
 pub use verdict::{Followed, Timed, Verdict, all_of, any_of};
+pub use write::{Circumstances, report};

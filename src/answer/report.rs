@@ -60,6 +60,8 @@ pub enum Outcome {
     Already {
         /// When it is lost again, s; none where it stays.
         lost_again_s: Option<f64>,
+        /// From when on it holds to the end, s, where that is later.
+        for_good_from_s: Option<f64>,
     },
     /// It is reached.
     At {
@@ -74,13 +76,16 @@ pub enum Outcome {
         clock: Option<String>,
         /// When it is lost again, s; none where it stays.
         lost_again_s: Option<f64>,
+        /// From when on it holds to the end, s, where that is later.
+        for_good_from_s: Option<f64>,
         /// Temperatures at that moment.
         state: State,
     },
     /// It is never reached: everything settles before.
     Never {
-        /// Where the watched quantity settles, in the unit of the limit (°C, K or K/h).
-        settles_at: f64,
+        /// Where the watched quantity settles, or, where all repeats itself, the nearest it comes to the limit,
+        /// in the unit of the limit (°C, K or K/h); none for all together.
+        settles_at: Option<f64>,
     },
     /// It is not reached within the time looked ahead.
     NotWithin {

@@ -15,6 +15,14 @@ pub enum SteadyError {
     },
 }
 
+impl std::fmt::Display for SteadyError {
+    fn fmt(&self, f: &mut std::fmt::Formatter<'_>) -> std::fmt::Result {
+        match self {
+            Self::NotFound { change } => write!(f, "the last change was still {change} K"),
+        }
+    }
+}
+
 /// Pseudo-time steps at most; a linear item needs about ten.
 const STEPS: usize = 200;
 /// First pseudo-time step, s: short against any item, so that the first changes are small.

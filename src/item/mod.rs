@@ -2,8 +2,14 @@
 //!
 //! An [`Item`] has private fields and one way in, `check`, so everything after it may trust what it says.
 
+mod check;
+mod check_faces;
+mod check_layers;
+mod check_watch;
 mod over_time;
+mod unusual;
 
+pub use check::{Checked, LOOK_AHEAD};
 pub use over_time::OverTime;
 
 use crate::matter::Law;

@@ -5,6 +5,14 @@
 //! in the place of the plain number. The JSON Schema is made from these types (`schema`), the reader that
 //! reports all problems at once is `read`.
 
+mod at;
+mod json;
+pub mod limits;
+mod nearest;
+mod read;
+mod read_faces;
 mod types;
 
+pub use nearest::nearest;
+pub use read::read;
 pub use types::*;

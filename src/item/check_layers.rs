@@ -1,0 +1,152 @@
+//! Layers: materials, properties, motion, contact.
+
+use super::{Layer, Motion};
+use crate::matter::Law;
+use crate::matter::library::{self, Material, Phase};
+use crate::problem::{Problem, Trouble};
+use crate::scenario::{WrittenLayer, WrittenMotion, WrittenProperty, nearest};
+use crate::units::kelvin;
+
+/// A still liquid thinner than this hardly moves, m. Common practice, no source.
+const THIN_LIQUID: f64 = 0.005;
+
+/// The layers with what is known of their materials.
+pub(super) struct Layers {
+    pub layers: Vec<Layer>,
+    /// The library material of each layer, if one.
+    pub materials: Vec<Option<Material>>,
+    pub still_liquids: Vec<(usize, Material)>,
+}
+
+pub(super) fn layers(written: &[WrittenLayer], problems: &mut Vec<Problem>) -> Option<Layers> {
+    let mut all = Layers { layers: Vec::new(), materials: Vec::new(), still_liquids: Vec::new() };
+    let mut sound = true;
+    for (number, layer) in written.iter().enumerate() {
+        let path = format!("/item/layers/{number}");
+        let material = material(layer, &path, problems);
+        let made = one(layer, number, material.as_ref(), &path, problems);
+        sound &= made.is_some() && (layer.material.is_none() || material.is_some());
+        if let (Some(made), Some(material)) = (&made, &material)
+            && material.phase == Phase::Liquid
+            && made.motion == Motion::Still
+            && made.thickness > THIN_LIQUID
+        {
+            all.still_liquids.push((number, material.clone()));
+        }
+        all.layers.extend(made);
+        all.materials.push(material);
+    }
+    sound.then_some(all)
+}
+
+fn material(layer: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Option<Material> {
+    let id = layer.material.as_ref()?;
+    let found = library::material(id);
+    if found.is_none() {
+        let trouble = Trouble::NotOneOf {
+            found: id.clone(),
+            nearest: nearest(id, library::ids()).map(str::to_owned),
+            allowed: library::ids().map(str::to_owned).collect(),
+        };
+        problems.push(Problem::error(format!("{path}/material"), trouble));
+    }
+    found
+}
+
+fn one(
+    written: &WrittenLayer,
+    number: usize,
+    material: Option<&Material>,
+    path: &str,
+    problems: &mut Vec<Problem>,
+) -> Option<Layer> {
+    let mut property = |given: Option<&WrittenProperty>, key: &str, from: fn(&Material) -> &Law| {
+        property(given, material.map(from), written.material.is_some(), &format!("{path}/{key}"), problems)
+    };
+    let density = property(written.density_kg_per_m3.as_ref(), "density_kg_per_m3", |m| &m.density);
+    let heat_capacity =
+        property(written.heat_capacity_j_per_kg_k.as_ref(), "heat_capacity_j_per_kg_k", |m| &m.heat_capacity);
+    let conductivity =
+        property(written.conductivity_w_per_m_k.as_ref(), "conductivity_w_per_m_k", |m| &m.conductivity);
+    let motion = motion(written, path, problems);
+    if number == 0 && written.contact_m2_k_per_w.is_some() {
+        let words = "the innermost layer has nothing inside it to be in contact with".to_owned();
+        problems.push(Problem::error(format!("{path}/contact_m2_k_per_w"), Trouble::Contradiction { words }));
+    }
+    let name = written.name.clone().filter(|name| !name.trim().is_empty());
+    let name = name.or_else(|| material.map(|material| material.name.to_owned()));
+    Some(Layer {
+        name: name.unwrap_or_else(|| format!("layer {}", number + 1)),
+        thickness: written.thickness_m.value(),
+        capacity: density?.times(&heat_capacity?),
+        conductivity: conductivity?,
+        motion: motion?,
+        contact: written.contact_m2_k_per_w.map_or(0.0, crate::scenario::Number::value),
+        material: material.map(|material| material.id),
+    })
+}
+
+fn motion(written: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Option<Motion> {
+    let path = format!("{path}/inside_film_w_per_m2_k");
+    let words = match (written.motion.unwrap_or_default(), written.inside_film_w_per_m2_k) {
+        (WrittenMotion::Still, None) => return Some(Motion::Still),
+        (WrittenMotion::SelfMixing | WrittenMotion::Stirred, Some(film)) => {
+            return Some(Motion::Mixed { film: film.value() });
+        }
+        (WrittenMotion::Still, Some(_)) => {
+            "a still layer has no inside film; leave it out, or set motion to self-mixing or stirred".to_owned()
+        }
+        (WrittenMotion::SelfMixing | WrittenMotion::Stirred, None) => {
+            let what = "the film between the moving contents and the layer beside them; water by its own \
+                        buoyancy has about 100 to 400";
+            problems.push(Problem::error(path, Trouble::Missing { what: what.to_owned() }));
+            return None;
+        }
+    };
+    problems.push(Problem::error(path, Trouble::Contradiction { words }));
+    None
+}
+
+/// The written property, else the material's.
+fn property(
+    written: Option<&WrittenProperty>,
+    material: Option<&Law>,
+    material_is_named: bool,
+    path: &str,
+    problems: &mut Vec<Problem>,
+) -> Option<Law> {
+    let Some(written) = written else {
+        if material.is_none() && !material_is_named {
+            let what = "a layer without a material needs density, heat capacity and conductivity".to_owned();
+            problems.push(Problem::error(path, Trouble::Missing { what }));
+        }
+        return material.cloned();
+    };
+    let law = law(written);
+    if law.lowest() > 0.0 {
+        return Some(law);
+    }
+    let words = format!("it falls to {} within its range; a property stays above 0", law.lowest());
+    problems.push(Problem::error(path, Trouble::Contradiction { words }));
+    None
+}
+
+fn law(written: &WrittenProperty) -> Law {
+    match written {
+        WrittenProperty::Number(number) => Law::Constant(number.value()),
+        WrittenProperty::Table { at_c, values } => {
+            let points: Vec<(f64, f64)> = at_c.iter().map(|&at| kelvin(at)).zip(values.iter().copied()).collect();
+            Law::table(&points)
+        }
+        WrittenProperty::Polynomial { polynomial_in_c, from_c, to_c } => {
+            // Written in °C, kept in the distance from its lower end (Horner's scheme, repeated).
+            let mut shifted = polynomial_in_c.clone();
+            for i in 0..shifted.len() {
+                for j in (i..shifted.len() - 1).rev() {
+                    shifted[j] += from_c * shifted[j + 1];
+                }
+            }
+            Law::polynomial(kelvin(*from_c), kelvin(*to_c), shifted)
+        }
+    }
+}
