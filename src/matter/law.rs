@@ -42,6 +42,11 @@ impl Law {
         Self::Pieces(Pieces::new(vec![from, to], vec![coefficients]))
     }
 
+    /// One polynomial in `T - origin` between `from` and `to` (K), coefficients from the constant up.
+    pub fn polynomial_about(origin: f64, from: f64, to: f64, coefficients: &[f64]) -> Self {
+        Self::polynomial(from, to, shifted(coefficients, from - origin))
+    }
+
     /// Polynomials in `T - left knot` between ascending knots (K).
     pub fn pieces(knots: Vec<f64>, coefficients: Vec<Vec<f64>>) -> Self {
         Self::Pieces(Pieces::new(knots, coefficients))
@@ -63,7 +68,7 @@ impl Law {
         }
     }
 
-    /// Product of two laws, held outside the overlap of... each at its own end values.
+    /// Product of two laws; outside its own range each is held at its own end values.
     #[must_use]
     pub fn times(&self, other: &Self) -> Self {
         match (self, other) {
@@ -222,6 +227,14 @@ mod tests {
         assert_relative_eq!(law.integral(600.0) - law.integral(300.0), 200.0 + 500.0);
         assert_relative_eq!(law.integral(700.0) - law.integral(600.0), 200.0);
         assert_relative_eq!(law.integral(300.0) - law.integral(250.0), 50.0);
+    }
+
+    #[test]
+    fn a_polynomial_may_be_written_about_any_origin() {
+        let law = Law::polynomial_about(273.15, 293.15, 373.15, &[425.0, 0.773, -1.69e-3, 2.22e-6]);
+        let x = 350.0 - 273.15;
+        let expected = 425.0 + x * (0.773 + x * (-1.69e-3 + x * 2.22e-6));
+        assert_relative_eq!(law.value(350.0), expected, max_relative = 1e-14);
     }
 
     #[test]
