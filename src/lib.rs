@@ -10,7 +10,6 @@
 
 pub mod answer;
 pub mod conduct;
-pub mod film;
 pub mod item;
 pub mod matter;
 pub mod mesh;
