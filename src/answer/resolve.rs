@@ -36,6 +36,8 @@ const TOLERANCE: (f64, f64) = (1.3e-3, 0.1);
 const FINEST: f64 = 1e-6;
 /// Half width of the band that is good enough, as a part of the time.
 const GOOD_BAND: f64 = 8e-4;
+/// A moment earlier than this part of the last one is asked no sharper than one at that time.
+const EARLY: f64 = 2e-3;
 /// Refinements at most.
 const ROUNDS: usize = 6;
 
@@ -84,6 +86,8 @@ fn to_the_end(item: &Item, tolerance: f64) -> Orders {
 struct Needed {
     /// Condition and number of the crossing.
     moments: Vec<(usize, usize)>,
+    /// The last of them, s.
+    last: f64,
     /// How far the fine march has to go, s.
     until: f64,
 }
@@ -98,7 +102,7 @@ impl Needed {
         moments.dedup();
         let last = moments.iter().fold(0.0, |last: f64, &(i, k)| last.max(coarse.crossings[i][k].time));
         let end = if last > 0.0 { 1.2 * last } else { time_of_the_change(coarse) };
-        Self { moments, until: end.min(item.look_ahead()).max(1e-3) }
+        Self { moments, last: last.max(f64::MIN_POSITIVE), until: end.min(item.look_ahead()).max(1e-3) }
     }
 }
 
@@ -124,7 +128,8 @@ fn worst_band(coarse: &March, fine: &March, needed: &Needed, tolerance: f64) -> 
         let found = fine.crossings[i].get(k).filter(|found| found.reached == rough.reached);
         let Some(found) = found else { return (f64::INFINITY, true) };
         let (by_mesh, by_time) = half_band(rough, *found, tolerance);
-        let width = (by_mesh + by_time) / found.time.max(f64::MIN_POSITIVE);
+        // A moment long before the last one need not be as sharp: nobody waits for its thousandth.
+        let width = (by_mesh + by_time) / found.time.max(EARLY * needed.last);
         if width > worst.0 {
             worst = (width, by_mesh > by_time);
         }

@@ -55,6 +55,18 @@ pub enum Verdict {
     NotWithin,
 }
 
+impl Verdict {
+    /// The same without what comes after the first time.
+    #[must_use]
+    pub fn first_only(self) -> Self {
+        match self {
+            Self::Already { .. } => Self::Already { lost: None, for_good: None },
+            Self::At { moment, .. } => Self::At { moment, lost: None, for_good: None },
+            Self::Never | Self::NotWithin => self,
+        }
+    }
+}
+
 /// A time over which all conditions hold.
 #[derive(Clone, Copy, Debug, PartialEq)]
 struct Spell {
@@ -100,8 +112,18 @@ fn spells(timelines: &[(bool, &[Timed])], rule: impl Fn(&[bool]) -> bool) -> Vec
         }
     }
     all.extend(open);
+    if let [first, second, ..] = all.as_slice()
+        && let (None, Some(lost), Some(again)) = (first.from, first.to, second.from)
+        && lost.time < FIRST_MOMENTS * again.time
+    {
+        all.remove(0);
+    }
     all
 }
+
+/// What holds at the stop only for this part of the time until it holds again is no answer: a difference that
+/// is nothing at first and grows at once.
+const FIRST_MOMENTS: f64 = 2e-3;
 
 fn verdict(spells: &[Spell], ending: Ending) -> Verdict {
     let Some(first) = spells.first() else {

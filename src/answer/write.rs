@@ -36,9 +36,9 @@ pub fn report(item: &Item, resolved: &Resolved, about: Circumstances) -> Report 
         headline,
         detail,
         ready: ready_verdict.map(|verdict| writer.outcome(&verdict, None)),
-        ready_when: writer.conditions(item.ready_when(), ready),
+        ready_when: writer.conditions(item.ready_when(), ready, false),
         standing: standing_verdict.map(|verdict| writer.outcome(&verdict, None)),
-        must_not: writer.conditions(item.must_not(), must_not),
+        must_not: writer.conditions(item.must_not(), must_not, true),
         heat_balance: writer.heat_balance(),
         by_hand: about.by_hand,
         cautions: cautions(&course),
@@ -90,17 +90,19 @@ impl Writer<'_> {
             .map(|(condition, _)| condition)
     }
 
-    fn conditions(&self, conditions: &[Condition], followed: &[Followed]) -> Vec<ConditionReport> {
+    fn conditions(&self, conditions: &[Condition], followed: &[Followed], limits: bool) -> Vec<ConditionReport> {
         let repeats = self.resolved.coarse.ending == Ending::Repeats;
         let one = |(condition, followed): (&Condition, &Followed)| {
             let verdict = all_of(std::slice::from_ref(followed), self.resolved.coarse.ending);
             let look_ahead = self.item.look_ahead();
+            // Of a limit the first crossing counts, whatever comes after it.
+            let told = if limits { verdict.first_only() } else { verdict };
             ConditionReport {
                 path: condition.path.clone(),
                 words: words::condition(condition),
                 outcome: self.outcome(&verdict, Some((condition, followed))),
                 outcome_words: words::outcome(
-                    &verdict,
+                    &told,
                     condition,
                     followed.nearest,
                     repeats,

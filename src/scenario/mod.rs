@@ -6,6 +6,7 @@
 //! reports all problems at once is `read`.
 
 mod at;
+mod examples;
 mod json;
 pub mod limits;
 mod nearest;
@@ -13,6 +14,7 @@ mod read;
 mod read_faces;
 mod types;
 
+pub use examples::{Example, examples};
 pub use nearest::nearest;
 pub use read::read;
 pub use types::*;
