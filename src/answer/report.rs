@@ -31,6 +31,8 @@ pub struct Report {
     pub by_hand: Vec<HandFormula>,
     /// Temperatures at time zero and where it ends.
     pub course: Course,
+    /// How far to trust the calculation, as (what, how much) in words.
+    pub checks: Vec<(&'static str, String)>,
     /// What it took to compute.
     pub effort: Effort,
     /// Warnings: allowed, but unusual or worth knowing.

@@ -1,5 +1,6 @@
 //! The answer in words: the same in page, batch result and sheet.
 
+use super::report::{Effort, HeatBalance};
 use super::verdict::{Timed, Verdict};
 use crate::item::{Condition, Sense, Watch};
 use crate::units::clock::Clock;
@@ -172,6 +173,44 @@ pub fn standing(verdict: &Verdict, first: Option<&Condition>, look_ahead: f64, c
             "What comes later was not looked at.".to_owned(),
         ),
     }
+}
+
+/// How far to trust the calculation, as (what, how much).
+pub fn checks(
+    decisive: Option<Timed>,
+    balance: &HeatBalance,
+    effort: &Effort,
+    clock: Option<Clock>,
+) -> Vec<(&'static str, String)> {
+    let mut all = Vec::new();
+    if let Some(moment) = decisive {
+        let half = words::duration(0.5 * (moment.high - moment.low));
+        let share = 50.0 * (moment.high - moment.low) / moment.time.max(f64::MIN_POSITIVE);
+        let text = format!("{} ± {half} ({} %)", when(moment.time, clock), short(share));
+        all.push(("Error of the calculation itself", text));
+    }
+    let heat = |joule: f64| format!("{} MJ", short(joule * 1e-6));
+    let faces = balance.in_inner_j + balance.in_outer_j;
+    let (stored, passed) = if faces <= 0.0 { ("given off", "left through the faces") } else { ("taken up", "came in through the faces") };
+    let text = format!(
+        "{} {stored} and {} {passed} {} until {}: they agree to {:.0e}",
+        heat(balance.stored_j.abs()),
+        heat(faces.abs()),
+        balance.per,
+        when(balance.until_s, clock),
+        balance.relative_error.max(1e-16)
+    );
+    all.push(("Heat balance", text));
+    let text = format!(
+        "{} and {} places, {} steps of order 4, tolerance {} and {} K, extrapolated",
+        effort.nodes[0],
+        effort.nodes[1],
+        effort.steps,
+        short(effort.tolerance_k[0]),
+        short(effort.tolerance_k[1])
+    );
+    all.push(("Calculated on", text));
+    all
 }
 
 /// With a capital first letter.

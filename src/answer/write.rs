@@ -30,6 +30,13 @@ pub fn report(item: &Item, resolved: &Resolved, about: Circumstances) -> Report 
     let standing_verdict = (!must_not.is_empty()).then(|| any_of(must_not, ending));
     let (headline, detail) = writer.headline(ready_verdict.as_ref(), standing_verdict.as_ref());
     let course = writer.course();
+    let heat_balance = writer.heat_balance();
+    let effort = writer.effort();
+    let decisive = [ready_verdict, standing_verdict].into_iter().flatten().find_map(|verdict| match verdict {
+        Verdict::At { moment, .. } => Some(moment),
+        Verdict::Already { .. } | Verdict::Never | Verdict::NotWithin => None,
+    });
+    let checks = words::checks(decisive, &heat_balance, &effort, about.clock);
     Report {
         stillheat: crate::scenario::VERSION,
         title: about.title,
@@ -39,11 +46,12 @@ pub fn report(item: &Item, resolved: &Resolved, about: Circumstances) -> Report 
         ready_when: writer.conditions(item.ready_when(), ready, false),
         standing: standing_verdict.map(|verdict| writer.outcome(&verdict, None)),
         must_not: writer.conditions(item.must_not(), must_not, true),
-        heat_balance: writer.heat_balance(),
+        heat_balance,
         by_hand: about.by_hand,
         cautions: cautions(&course),
         course,
-        effort: writer.effort(),
+        checks,
+        effort,
         warnings: about.warnings,
     }
 }

@@ -12,9 +12,13 @@ pub mod limits;
 mod nearest;
 mod read;
 mod read_faces;
+#[cfg(not(target_arch = "wasm32"))]
+mod schema;
 mod types;
 
 pub use examples::{Example, examples};
 pub use nearest::nearest;
 pub use read::read;
+#[cfg(not(target_arch = "wasm32"))]
+pub use schema::schema;
 pub use types::*;
