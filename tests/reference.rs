@@ -9,8 +9,13 @@
 use serde::Deserialize;
 use std::f64::consts::TAU;
 use stillheat::Solved;
-use stillheat::answer::{History, Outcome};
-use stillheat::item::{Region, Side, Watch};
+use stillheat::answer::{History, Orders, Outcome, march, mesh};
+use stillheat::item::{Item, Region, Side, Watch};
+
+/// Cells across the slowest layer of the two meshes on which single temperatures are computed.
+const CELLS: usize = 24;
+/// Largest error of a step in their marches, K.
+const TOLERANCE: f64 = 1e-3;
 
 /// One file.
 #[derive(Deserialize)]
@@ -149,7 +154,7 @@ fn cases() -> Vec<Case> {
 }
 
 fn find(solved: &Solved, ask: &Ask) -> Result<Found, String> {
-    let history = &solved.answer.history;
+    let item = &solved.item;
     match *ask {
         Ask::TimeOf { time_of } => match outcome(solved, time_of)? {
             Outcome::At { time_s, low_s, high_s, .. } => {
@@ -161,7 +166,10 @@ fn find(solved: &Solved, ask: &Ask) -> Result<Found, String> {
             Outcome::Never { settles_at } => Ok(Found::bare(*settles_at)),
             other => Err(format!("does not settle: {other:?}")),
         },
-        Ask::Temperature { temperature_at_s, of } => temperature(history, temperature_at_s, of),
+        Ask::Temperature { temperature_at_s: time, of } => {
+            let kelvin = extrapolated(item, time, |history| history.watch(&of.watch(), time));
+            Ok(Found::bare(stillheat::units::celsius(kelvin)))
+        }
         Ask::HeatOut { heat_out_w } => {
             let balance = &solved.report.heat_balance;
             let heat = match heat_out_w {
@@ -171,11 +179,15 @@ fn find(solved: &Solved, ask: &Ask) -> Result<Found, String> {
             Ok(Found::bare(-heat / balance.until_s))
         }
         Ask::Amplitude { amplitude_of, period_s } => {
-            Ok(Found::bare(last_swing(history, amplitude_of, period_s).0))
+            let amplitude = |history: &History| last_swing(history, amplitude_of, period_s).0;
+            Ok(Found::bare(extrapolated(item, item.look_ahead(), amplitude)))
         }
         Ask::Lag { lag_of, period_s, behind_s } => {
-            let highest_at = last_swing(history, lag_of, period_s).1;
-            Ok(Found::bare((highest_at - behind_s).rem_euclid(period_s)))
+            let lag = |history: &History| {
+                let highest_at = last_swing(history, lag_of, period_s).1;
+                (highest_at - behind_s).rem_euclid(period_s)
+            };
+            Ok(Found::bare(extrapolated(item, item.look_ahead(), lag)))
         }
     }
 }
@@ -185,11 +197,14 @@ fn outcome(solved: &Solved, condition: usize) -> Result<&Outcome, String> {
     Ok(&report.outcome)
 }
 
-fn temperature(history: &History, time: f64, of: Of) -> Result<Found, String> {
-    if time > history.end() {
-        return Err(format!("the march ends at {} s", history.end()));
-    }
-    Ok(Found::bare(stillheat::units::celsius(history.watch(&of.watch(), time))))
+/// A number read off the march up to a time, extrapolated from two meshes as the answers are.
+fn extrapolated(item: &Item, until: f64, read: impl Fn(&History) -> f64) -> f64 {
+    let orders = Orders { tolerance: TOLERANCE, until, stop_when_settled: false, stop_when_reached: false };
+    let [coarse, fine] = [0, 1].map(|halvings| {
+        let march = march(item, &mesh(item, CELLS, halvings), &[], orders).expect("a start");
+        read(&march.history)
+    });
+    fine + (fine - coarse) / 3.0
 }
 
 /// Amplitude (K) and a time of the highest value (s) of the fundamental of the last period.
@@ -235,7 +250,7 @@ impl Table {
             Some((low, high)) => {
                 self.widths.push((high - low) / found.value);
                 let inside = low - expected.known_to <= expected.value && expected.value <= high + expected.known_to;
-                (format!("{low:.8} to {high:.8}", low = Short(low), high = Short(high)), inside)
+                (format!("{} to {}", Short(low), Short(high)), inside)
             }
         };
         let row = format!(
