@@ -154,7 +154,7 @@ fn cases() -> Vec<Case> {
 }
 
 fn find(solved: &Solved, ask: &Ask) -> Result<Found, String> {
-    let item = &solved.item;
+    let item = &solved.checked.item;
     match *ask {
         Ask::TimeOf { time_of } => match outcome(solved, time_of)? {
             Outcome::At { time_s, low_s, high_s, .. } => {
@@ -163,7 +163,7 @@ fn find(solved: &Solved, ask: &Ask) -> Result<Found, String> {
             other => Err(format!("not reached: {other:?}")),
         },
         Ask::SettlesAt { settles_at } => match outcome(solved, settles_at)? {
-            Outcome::Never { settles_at } => Ok(Found::bare(*settles_at)),
+            Outcome::Never { settles_at: Some(value) } => Ok(Found::bare(*value)),
             other => Err(format!("does not settle: {other:?}")),
         },
         Ask::Temperature { temperature_at_s: time, of } => {

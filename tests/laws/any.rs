@@ -84,8 +84,10 @@ pub fn any(rolls: &[f64]) -> Any {
         "surroundings": surroundings,
         "probes": [{"name": "p", "from_outside_m": few_digits(0.3 * thickness)}],
         "ready_when": ready_when,
-        "must_not": must_not,
     });
+    if !must_not.is_empty() {
+        file["must_not"] = json!(must_not);
+    }
     if draw.longest_period > 0.0 {
         file["look_ahead_s"] = json!(PERIODS * draw.longest_period);
     }

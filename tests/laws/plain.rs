@@ -31,7 +31,7 @@ pub fn plain(rolls: &[f64]) -> Plain {
     let file = json!({
         "stillheat": 1,
         // Long enough for the slowest of them.
-        "look_ahead_s": 3e9,
+        "look_ahead_s": 3e8,
         "item": item,
         "start": {"uniform_c": hot},
         "surroundings": {"outer": [outer]},
@@ -48,10 +48,10 @@ pub fn plain(rolls: &[f64]) -> Plain {
 fn layer(dice: &mut Dice, i: usize) -> Value {
     let mut layer = json!({
         "name": format!("layer {i}"),
-        "thickness_m": dice.scale(0.002, 0.3),
-        "density_kg_per_m3": dice.scale(50.0, 8000.0),
+        "thickness_m": dice.scale(0.002, 0.15),
+        "density_kg_per_m3": dice.scale(50.0, 4000.0),
         "heat_capacity_j_per_kg_k": dice.scale(400.0, 4200.0),
-        "conductivity_w_per_m_k": dice.scale(0.03, 100.0),
+        "conductivity_w_per_m_k": dice.scale(0.05, 100.0),
     });
     if i > 0 && dice.chance(0.3) {
         layer["contact_m2_k_per_w"] = json!(dice.scale(1e-4, 0.05));

@@ -30,7 +30,7 @@ fn workloads(bench: &mut Criterion) {
     for (name, case, cells) in WORKLOADS {
         let case: serde_json::Value = serde_json::from_str(case).expect("JSON");
         let text = case["scenario"].to_string();
-        let item = stillheat::solve(&text).expect("a valid scenario").item;
+        let item = stillheat::solve(&text).expect("a valid scenario").checked.item;
         let mesh = mesh(&item, cells);
         let until = item.look_ahead();
         let orders = Orders { tolerance: TOLERANCE, until, stop_when_settled: false, stop_when_reached: true };

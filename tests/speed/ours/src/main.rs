@@ -70,7 +70,7 @@ fn main() {
 
 fn marches(name: &str, text: &str, cells: &[usize], repetitions: usize) {
     let solved = stillheat::solve(text).expect("a valid scenario");
-    let item = &solved.item;
+    let item = &solved.checked.item;
     let mesh = mesh(item, cells);
     for tolerance in TOLERANCES {
         let orders =
