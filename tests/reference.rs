@@ -146,7 +146,8 @@ fn cases() -> Vec<Case> {
         .iter()
         .map(|file| {
             let text = std::fs::read_to_string(file).unwrap();
-            let case: Case = serde_json::from_str(&text).unwrap_or_else(|e| panic!("{}: {e}", file.display()));
+            let case: Case =
+                serde_json::from_str(&text).unwrap_or_else(|e| panic!("{}: {e}", file.display()));
             assert_eq!(Some(case.id.as_str()), file.file_stem().and_then(|stem| stem.to_str()));
             case
         })
@@ -249,7 +250,8 @@ impl Table {
             None => (String::new(), true),
             Some((low, high)) => {
                 self.widths.push((high - low) / found.value);
-                let inside = low - expected.known_to <= expected.value && expected.value <= high + expected.known_to;
+                let inside =
+                    low - expected.known_to <= expected.value && expected.value <= high + expected.known_to;
                 (format!("{} to {}", Short(low), Short(high)), inside)
             }
         };

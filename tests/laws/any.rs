@@ -70,8 +70,10 @@ pub fn any(rolls: &[f64]) -> Any {
 
     let thickness: f64 = layers.iter().filter_map(|layer| layer["thickness_m"].as_f64()).sum();
     let start = draw.start(count, thickness, has_inner_face);
-    let ready_when: Vec<Value> = (0..1 + draw.dice.below(3)).map(|_| draw.condition(count, has_inner_face)).collect();
-    let must_not: Vec<Value> = (0..draw.dice.below(3)).map(|_| draw.condition(count, has_inner_face)).collect();
+    let ready_when: Vec<Value> =
+        (0..1 + draw.dice.below(3)).map(|_| draw.condition(count, has_inner_face)).collect();
+    let must_not: Vec<Value> =
+        (0..draw.dice.below(3)).map(|_| draw.condition(count, has_inner_face)).collect();
 
     let mut item = json!({"shape": shape, "layers": layers});
     if let Some(radius) = hollow {
@@ -150,7 +152,10 @@ impl Draw<'_> {
     fn measure(&mut self, layers: &[Value], hollow: Option<f64>) {
         let at = |layer: &Value, key: &str| {
             let value = &layer[key];
-            value.as_f64().or_else(|| value["values"][0].as_f64()).or_else(|| value["polynomial_in_c"][0].as_f64())
+            value
+                .as_f64()
+                .or_else(|| value["values"][0].as_f64())
+                .or_else(|| value["polynomial_in_c"][0].as_f64())
         };
         let (mut capacity, mut resistance, mut thickness) = (0.0, 0.1, 0.0);
         for layer in layers {
@@ -163,7 +168,8 @@ impl Draw<'_> {
                 + at(layer, "contact_m2_k_per_w").unwrap_or(0.0);
         }
         // A hollow sphere gathers the flux of its outer face on its inner one.
-        let spread = hollow.map_or(1.0, |radius| (radius + thickness) * (radius + thickness) / (radius * radius));
+        let spread =
+            hollow.map_or(1.0, |radius| (radius + thickness) * (radius + thickness) / (radius * radius));
         self.slow = (capacity * resistance).clamp(60.0, 8e6);
         self.strong_flux = MOVED_BY_FLUX / (resistance * spread * 2.0);
     }
@@ -293,8 +299,12 @@ impl Draw<'_> {
                 let face = if has_inner_face && self.dice.chance(0.5) { "inner" } else { "outer" };
                 json!({"what": "face", "of": face, side: limit})
             }
-            6 => json!({"what": "difference", "of": region(self.dice), "below_k": self.dice.scale(0.5, 50.0)}),
-            _ => json!({"what": "rate", "of": region(self.dice), "below_k_per_h": self.dice.scale(0.1, 100.0)}),
+            6 => {
+                json!({"what": "difference", "of": region(self.dice), "below_k": self.dice.scale(0.5, 50.0)})
+            }
+            _ => {
+                json!({"what": "rate", "of": region(self.dice), "below_k_per_h": self.dice.scale(0.1, 100.0)})
+            }
         }
     }
 }

@@ -27,7 +27,8 @@ fn check<S: Strategy>(cases: u32, strategy: &S, law: impl Fn(S::Value) -> Result
 }
 
 fn solve(file: &Value) -> Result<Solved, TestCaseError> {
-    stillheat::solve(&file.to_string()).map_err(|problems| TestCaseError::fail(format!("{problems:?}\n{file}")))
+    stillheat::solve(&file.to_string())
+        .map_err(|problems| TestCaseError::fail(format!("{problems:?}\n{file}")))
 }
 
 fn marches(solved: &Solved) -> [&March; 2] {
@@ -69,8 +70,16 @@ fn stays_between(any: &Any, solved: &Solved) -> Result<(), TestCaseError> {
                 prop_assert!(temperature.is_finite());
                 let colder = low - temperature;
                 let hotter = temperature - high;
-                prop_assert!(any.cooled || colder <= tolerance, "{colder} K too cold at {time} s\n{}", any.file);
-                prop_assert!(any.heated || hotter <= tolerance, "{hotter} K too hot at {time} s\n{}", any.file);
+                prop_assert!(
+                    any.cooled || colder <= tolerance,
+                    "{colder} K too cold at {time} s\n{}",
+                    any.file
+                );
+                prop_assert!(
+                    any.heated || hotter <= tolerance,
+                    "{hotter} K too hot at {time} s\n{}",
+                    any.file
+                );
             }
         }
     }

@@ -23,7 +23,11 @@ fn mesh(item: &Item, cells: &[usize]) -> Mesh {
         cells,
     });
     let open = |side: Side| item.face(side).rows.iter().any(|row| row.1 != Face::Insulated);
-    line(&Line { shape: item.shape(), layers: layers.collect(), active: [open(Side::Inner), open(Side::Outer)] })
+    line(&Line {
+        shape: item.shape(),
+        layers: layers.collect(),
+        active: [open(Side::Inner), open(Side::Outer)],
+    })
 }
 
 fn workloads(bench: &mut Criterion) {
@@ -33,12 +37,15 @@ fn workloads(bench: &mut Criterion) {
         let item = stillheat::solve(&text).expect("a valid scenario").checked.item;
         let mesh = mesh(&item, cells);
         let until = item.look_ahead();
-        let orders = Orders { tolerance: TOLERANCE, until, stop_when_settled: false, stop_when_reached: true };
+        let orders =
+            Orders { tolerance: TOLERANCE, until, stop_when_settled: false, stop_when_reached: true };
         bench.bench_function(&format!("{name} march"), |run| {
             run.iter(|| march(black_box(&item), &mesh, item.ready_when(), orders));
         });
         bench.bench_function(&format!("{name} whole answer"), |run| {
-            run.iter(|| stillheat::solve(black_box(&text)).map(|solved| serde_json::to_string(&solved.report)));
+            run.iter(|| {
+                stillheat::solve(black_box(&text)).map(|solved| serde_json::to_string(&solved.report))
+            });
         });
     }
 }

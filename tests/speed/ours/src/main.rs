@@ -49,7 +49,11 @@ fn mesh(item: &Item, cells: &[usize]) -> Mesh {
         cells,
     });
     let open = |side: Side| item.face(side).rows.iter().any(|row| row.1 != Face::Insulated);
-    line(&Line { shape: item.shape(), layers: layers.collect(), active: [open(Side::Inner), open(Side::Outer)] })
+    line(&Line {
+        shape: item.shape(),
+        layers: layers.collect(),
+        active: [open(Side::Inner), open(Side::Outer)],
+    })
 }
 
 fn main() {
@@ -93,10 +97,15 @@ fn whole_answer(name: &str, text: &str, repetitions: usize) {
         (solved.report, result)
     };
     let (report, _) = run();
-    let Some(stillheat::answer::Outcome::At { time_s, .. }) = report.ready else { panic!("{name} has a ready time") };
+    let Some(stillheat::answer::Outcome::At { time_s, .. }) = report.ready else {
+        panic!("{name} has a ready time")
+    };
     let cost = milliseconds(repetitions, || {
         black_box(run());
     });
     let effort = &report.effort;
-    println!("{name} {} answer {:e} {time_s:.17e} {} {cost:.6}", effort.nodes[1], effort.tolerance_k[1], effort.steps);
+    println!(
+        "{name} {} answer {:e} {time_s:.17e} {} {cost:.6}",
+        effort.nodes[1], effort.tolerance_k[1], effort.steps
+    );
 }
