@@ -94,8 +94,9 @@ fn volume_weights(region: Region, mesh: &Mesh) -> Vec<(usize, f64)> {
 ///
 /// Its error is of order 4 in the cells, so the mesh decides about the accuracy, not the place.
 fn place_weights(place: f64, mesh: &Mesh) -> Vec<(usize, f64)> {
-    let reaches = |&&(_, last): &&(usize, usize)| place <= mesh.places[last] * (1.0 + 1e-12);
-    let &(first, last) = mesh.layers.iter().find(reaches).unwrap_or(&mesh.layers[mesh.layers.len() - 1]);
+    // The node of a mixed layer sits in its middle: where a layer ends is not said by its nodes.
+    let layer = mesh.ends.partition_point(|&end| place > end * (1.0 + 1e-12)).min(mesh.layers.len() - 1);
+    let (first, last) = mesh.layers[layer];
     let count = (last - first + 1).min(4);
     let after = first + mesh.places[first..=last].partition_point(|&node| node < place);
     let from = after.saturating_sub(count / 2).clamp(first, last + 1 - count);
@@ -162,6 +163,18 @@ mod tests {
             let place = 2.0 * f64::from(i) / 40.0;
             let found = Gauge::new(Watch::Place(place), &mesh).value(&mesh.places, &temperatures, &[]);
             assert!((found - cubic(place)).abs() < 1e-10, "{place}: {found}");
+        }
+    }
+
+    #[test]
+    fn a_place_anywhere_in_a_mixed_layer_reads_its_one_temperature() {
+        let still = LineLayer { thickness: 1.0, mixed: false, joint_resists: false, cells: 3 };
+        let layers = vec![still, LineLayer { mixed: true, ..still }, still];
+        let mesh = line(&Line { shape: Shape::Slab, layers, active: [true, true] });
+        let temperatures: Vec<f64> = (0..mesh.nodes()).map(|i| 300.0 + 10.0 * i as f64).collect();
+        for place in [1.01, 1.49, 1.51, 1.99] {
+            let found = Gauge::new(Watch::Place(place), &mesh).value(&mesh.places, &temperatures, &[]);
+            assert!((found - 340.0).abs() < 1e-10, "{place}: {found}");
         }
     }
 

@@ -11,6 +11,7 @@ mod verdict;
 mod words;
 mod write;
 
+pub use cells::mesh;
 pub use gauge::Gauge;
 pub use history::History;
 pub use march::{Crossing, Ending, March, Orders, march};

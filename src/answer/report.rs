@@ -127,7 +127,7 @@ pub struct HeatBalance {
     pub in_inner_j: f64,
     /// In through the outer face, J.
     pub in_outer_j: f64,
-    /// |stored - in| over the heat that moved.
+    /// |stored - in| over the heat that moved through the faces or inside, at least that of 0.1 K throughout.
     pub relative_error: f64,
 }
 

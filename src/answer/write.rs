@@ -4,10 +4,14 @@ use super::report::{ConditionReport, Course, Effort, HandFormula, HeatBalance, O
 use super::resolve::Resolved;
 use super::verdict::{Followed, Verdict, all_of, any_of};
 use super::{Ending, History, words};
+use crate::conduct::Balance;
 use crate::item::{Condition, Item, Region, Shape, Side, Watch};
 use crate::problem::Problem;
 use crate::units::celsius;
 use crate::units::clock::Clock;
+
+/// A change of temperature that can be told from rounding to nine digits, K.
+const FELT: f64 = 0.1;
 
 /// What the report needs beside the item and its marches.
 pub struct Circumstances {
@@ -162,7 +166,7 @@ impl Writer<'_> {
     fn heat_balance(&self) -> HeatBalance {
         let fine = &self.resolved.fine;
         let [inner, outer] = fine.end.heat_in;
-        let moved = fine.moved.max(fine.stored.abs());
+        let moved = self.moved();
         let error = (fine.stored - inner - outer).abs();
         HeatBalance {
             per: match self.item.shape() {
@@ -174,8 +178,21 @@ impl Writer<'_> {
             stored_j: fine.stored,
             in_inner_j: inner,
             in_outer_j: outer,
-            relative_error: if moved > 0.0 { error / moved } else { 0.0 },
+            relative_error: error / moved,
         }
+    }
+
+    /// Heat that moved, J: through the faces, or from one place of a closed item to another.
+    ///
+    /// At least that of [`FELT`] throughout: where less happens, the rounding of the temperatures shows.
+    fn moved(&self) -> f64 {
+        let fine = &self.resolved.fine;
+        let mut capacities = Vec::new();
+        Balance::new(self.item, fine.history.mesh()).capacities(&fine.end.temperatures, &mut capacities);
+        let (start, end) = (fine.history.temperatures(0.0), &fine.end.temperatures);
+        let changes = start.iter().zip(end).map(|(before, after)| (after - before).abs().max(FELT));
+        let inside: f64 = capacities.iter().zip(changes).map(|(capacity, change)| capacity * change).sum();
+        fine.moved.max(inside)
     }
 
     fn effort(&self) -> Effort {

@@ -35,12 +35,14 @@ pub fn line(line: &Line) -> Mesh {
         parts: Vec::new(),
         links: Vec::new(),
         layers: Vec::new(),
+        ends: Vec::new(),
         faces: [None, None],
     };
     let mut inside = 0.0;
     for number in 0..line.layers.len() {
         add_layer(&mut mesh, line, number, inside);
         inside += line.layers[number].thickness;
+        mesh.ends.push(inside);
     }
     let radius = line.shape.inner_radius();
     if line.shape.has_inner_face() {

@@ -19,6 +19,8 @@ pub struct Mesh {
     pub links: Vec<Link>,
     /// The nodes of each layer, from the inside out, as (first, last).
     pub layers: Vec<(usize, usize)>,
+    /// Where each layer ends: distance from the inside, m, ascending.
+    pub ends: Vec<f64>,
     /// The inner and the outer face, where there is one.
     pub faces: [Option<FaceNode>; 2],
 }
