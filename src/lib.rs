@@ -10,6 +10,7 @@
 
 pub mod answer;
 pub mod conduct;
+pub mod film;
 pub mod item;
 pub mod matter;
 pub mod mesh;

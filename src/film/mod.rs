@@ -1,0 +1,3 @@
+//! Film coefficients, emissivities and contacts.
+
+pub mod choices;
