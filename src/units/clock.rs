@@ -76,6 +76,18 @@ impl Clock {
         format!("{} {} {month} {}, {}", self.weekday(), self.0.day(), self.0.year(), self.time())
     }
 
+    /// "3 Mar"
+    pub fn day(self) -> String {
+        let month = MONTHS[usize::from(self.0.month().unsigned_abs()) - 1];
+        format!("{} {}", self.0.day(), &month[..3])
+    }
+
+    /// Time of day, s after midnight.
+    pub fn since_midnight(self) -> f64 {
+        let t = self.0;
+        f64::from(t.hour()) * 3_600.0 + f64::from(t.minute()) * 60.0 + f64::from(t.second())
+    }
+
     fn weekday(self) -> &'static str {
         WEEKDAYS[usize::from(self.0.weekday().to_monday_zero_offset().unsigned_abs())]
     }

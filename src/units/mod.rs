@@ -4,7 +4,7 @@
 //! people write come in and go out.
 
 pub mod clock;
-
+pub mod display;
 pub mod words;
 
 /// 0 °C in K, exact (SI brochure, 9th edition, 2019, section 2.3.1).

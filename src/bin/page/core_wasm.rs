@@ -52,5 +52,6 @@ pub fn add_target() -> Result<(), Box<dyn Error>> {
     if added.is_ok_and(|status| status.success()) {
         return Ok(());
     }
-    Err(format!("the target {TARGET} is missing and could not be added; try: rustup target add {TARGET}").into())
+    Err(format!("the target {TARGET} is missing and could not be added; try: rustup target add {TARGET}")
+        .into())
 }

@@ -86,9 +86,9 @@ fn answer(wanted: &Wanted) -> ExitCode {
 
 fn examples(folder: &std::path::Path) -> ExitCode {
     let written = std::fs::create_dir_all(folder).and_then(|()| {
-        stillheat::scenario::examples().iter().try_for_each(|example| {
-            std::fs::write(folder.join(format!("{}.json", example.id)), example.text)
-        })
+        stillheat::scenario::examples()
+            .iter()
+            .try_for_each(|example| std::fs::write(folder.join(format!("{}.json", example.id)), example.text))
     });
     match written {
         Ok(()) => ExitCode::SUCCESS,
