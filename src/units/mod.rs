@@ -4,6 +4,7 @@
 //! people write come in and go out.
 
 pub mod clock;
+pub mod quantity;
 
 pub mod words;
 
