@@ -112,11 +112,10 @@ interface PictureTable {
 
 /** The class that wasm-bindgen makes of the core's page. */
 interface CorePage {
-  solve(text: string, us: boolean): Solution;
+  solve(text: string): Solution;
   draw(picture: string, context: CanvasRenderingContext2D, width: number, height: number, ratio: number, time: number, dark: boolean, us: boolean): void;
   table(picture: string, time: number, us: boolean): PictureTable;
   moment_words(time: number): string;
-  draw_svg(picture: string, width: number, height: number, time: number, us: boolean): string;
 }
 
 interface CoreFunctions {

@@ -49,10 +49,12 @@ fn typical_temperature(item: &Item) -> f64 {
         Start::Profile(points) => points.iter().map(|point| point.1).sum::<f64>() / points.len() as f64,
         Start::SteadyBefore { contents: Some(temperature), .. } => *temperature,
         Start::SteadyBefore { inner, outer, .. } => {
-            let (low, high) = [inner, outer].iter().filter_map(|face| extent(face)).fold(
-                (f64::INFINITY, f64::NEG_INFINITY),
-                |(low, high), (from, to)| (low.min(from), high.max(to)),
-            );
+            let (low, high) = [inner, outer]
+                .iter()
+                .filter_map(|face| extent(face))
+                .fold((f64::INFINITY, f64::NEG_INFINITY), |(low, high), (from, to)| {
+                    (low.min(from), high.max(to))
+                });
             if low <= high { 0.5 * (low + high) } else { 300.0 }
         }
     }
@@ -75,6 +77,7 @@ pub(super) fn span(item: &Item, start: &[f64]) -> f64 {
     let rows = [Side::Inner, Side::Outer].into_iter().flat_map(|side| &item.face(side).rows);
     let seen = rows.filter_map(|row| extent(&row.1)).flat_map(|(low, high)| [low, high]);
     let all = start.iter().copied().chain(seen);
-    let (low, high) = all.fold((f64::INFINITY, f64::NEG_INFINITY), |(low, high), t| (low.min(t), high.max(t)));
+    let (low, high) =
+        all.fold((f64::INFINITY, f64::NEG_INFINITY), |(low, high), t| (low.min(t), high.max(t)));
     high - low
 }

@@ -102,9 +102,10 @@ fn place_weights(place: f64, mesh: &Mesh) -> Vec<(usize, f64)> {
     let from = after.saturating_sub(count / 2).clamp(first, last + 1 - count);
     let nodes = from..from + count;
     let weight = |i: usize| {
-        nodes.clone().filter(|&j| j != i).fold(1.0, |product, j| {
-            product * (place - mesh.places[j]) / (mesh.places[i] - mesh.places[j])
-        })
+        nodes
+            .clone()
+            .filter(|&j| j != i)
+            .fold(1.0, |product, j| product * (place - mesh.places[j]) / (mesh.places[i] - mesh.places[j]))
     };
     nodes.clone().map(|i| (i, weight(i))).collect()
 }
@@ -183,8 +184,7 @@ mod tests {
         let mesh = mesh();
         let temperatures: Vec<f64> =
             mesh.places.iter().map(|&x| 400.0 - 50.0 * (x - 0.6123) * (x - 0.6123)).collect();
-        let found =
-            Gauge::new(Watch::Hottest(Region::Whole), &mesh).value(&mesh.places, &temperatures, &[]);
+        let found = Gauge::new(Watch::Hottest(Region::Whole), &mesh).value(&mesh.places, &temperatures, &[]);
         assert!((found - 400.0).abs() < 1e-10, "{found}");
     }
 }

@@ -86,7 +86,12 @@ const MOST_STEPS: usize = 200_000;
 ///
 /// # Errors
 /// Where the start is an earlier steady state that cannot be found.
-pub fn march(item: &Item, mesh: &Mesh, conditions: &[Condition], orders: Orders) -> Result<March, SteadyError> {
+pub fn march(
+    item: &Item,
+    mesh: &Mesh,
+    conditions: &[Condition],
+    orders: Orders,
+) -> Result<March, SteadyError> {
     let balance = Balance::new(item, mesh);
     let start = start_temperatures(item, mesh, &balance)?;
     let mut walker = Walker::new(item, mesh, &balance, conditions, orders, start);
@@ -133,7 +138,8 @@ impl<'a> Walker<'a> {
         orders: Orders,
         start: Vec<f64>,
     ) -> Self {
-        let gauges: Vec<Gauge> = conditions.iter().map(|condition| Gauge::new(condition.watch, mesh)).collect();
+        let gauges: Vec<Gauge> =
+            conditions.iter().map(|condition| Gauge::new(condition.watch, mesh)).collect();
         let first_stored = balance.stored(&start);
         Self {
             item,
@@ -282,7 +288,8 @@ impl<'a> Walker<'a> {
             // Exactly, so that the rows that begin there are found.
             self.at.time = corner;
         }
-        self.moved += self.at.heat_in.iter().zip(before).map(|(now, before)| (now - before).abs()).sum::<f64>();
+        self.moved +=
+            self.at.heat_in.iter().zip(before).map(|(now, before)| (now - before).abs()).sum::<f64>();
         self.steps += 1;
         self.history.add(self.at.time, &self.at.temperatures, &self.bend.0, &self.bend.1);
         self.look();

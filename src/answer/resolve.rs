@@ -150,7 +150,13 @@ fn follow(coarse: &March, fine: &March, conditions: &[Condition], tolerance: f64
             let (by_mesh, by_time) = half_band(rough, *found, tolerance);
             let time = (found.time + (found.time - rough.time) / 3.0).max(0.0);
             let half = by_mesh + by_time;
-            Timed { time, low: (time - half).max(0.0), high: time + half, on_fine: found.time, reached: rough.reached }
+            Timed {
+                time,
+                low: (time - half).max(0.0),
+                high: time + half,
+                on_fine: found.time,
+                reached: rough.reached,
+            }
         }
         // Beyond the fine march: the coarse one stands alone, with all of its own doubt.
         _ => {

@@ -74,9 +74,18 @@ fn short(value: f64) -> String {
 }
 
 /// What became of one condition: "Tuesday 14:20", "from the start", "never: it settles at 63.2 °C".
-pub fn outcome(verdict: &Verdict, of: &Condition, nearest: f64, repeats: bool, look_ahead: f64, clock: Option<Clock>) -> String {
+pub fn outcome(
+    verdict: &Verdict,
+    of: &Condition,
+    nearest: f64,
+    repeats: bool,
+    look_ahead: f64,
+    clock: Option<Clock>,
+) -> String {
     match verdict {
-        Verdict::Already { lost, for_good } => format!("from the start{}", coming_and_going(*lost, *for_good, clock)),
+        Verdict::Already { lost, for_good } => {
+            format!("from the start{}", coming_and_going(*lost, *for_good, clock))
+        }
         Verdict::At { moment, lost, for_good } => {
             format!("{}{}", when(moment.time, clock), coming_and_going(*lost, *for_good, clock))
         }
@@ -91,7 +100,8 @@ pub fn outcome(verdict: &Verdict, of: &Condition, nearest: f64, repeats: bool, l
 /// ", lost again Tuesday 18:00, for good from Wednesday 02:00"
 pub fn coming_and_going(lost: Option<Timed>, for_good: Option<Timed>, clock: Option<Clock>) -> String {
     let lost = lost.map_or_else(String::new, |lost| format!(", lost again {}", when(lost.time, clock)));
-    let good = for_good.map_or_else(String::new, |good| format!(", for good from {}", when(good.time, clock)));
+    let good =
+        for_good.map_or_else(String::new, |good| format!(", for good from {}", when(good.time, clock)));
     lost + &good
 }
 
@@ -118,7 +128,9 @@ pub fn ready(
         }
         Verdict::Already { lost, for_good } => {
             let comes = coming_and_going(*lost, *for_good, clock);
-            let detail = if lost.is_none() { "All that was asked holds at the stop and stays so.".to_owned() } else {
+            let detail = if lost.is_none() {
+                "All that was asked holds at the stop and stays so.".to_owned()
+            } else {
                 format!("All that was asked holds at the stop{comes}.")
             };
             ("Ready from the start".to_owned(), detail)
@@ -153,7 +165,12 @@ fn never(conditions: &[Condition], nearest: &[f64]) -> (String, String) {
 }
 
 /// Headline and second line for how long it may stand.
-pub fn standing(verdict: &Verdict, first: Option<&Condition>, look_ahead: f64, clock: Option<Clock>) -> (String, String) {
+pub fn standing(
+    verdict: &Verdict,
+    first: Option<&Condition>,
+    look_ahead: f64,
+    clock: Option<Clock>,
+) -> (String, String) {
     let what = first.map_or_else(String::new, |first| format!(": then {}", condition(first)));
     match verdict {
         Verdict::At { moment, .. } => {
@@ -164,10 +181,13 @@ pub fn standing(verdict: &Verdict, first: Option<&Condition>, look_ahead: f64, c
                 format!("{after} after the stop, calculated to ± {band}{what}."),
             )
         }
-        Verdict::Already { .. } => {
-            ("Past its limit from the start".to_owned(), capital(&format!("{}.", what.trim_start_matches(": then "))))
+        Verdict::Already { .. } => (
+            "Past its limit from the start".to_owned(),
+            capital(&format!("{}.", what.trim_start_matches(": then "))),
+        ),
+        Verdict::Never => {
+            ("No limit is reached".to_owned(), "All settles before any limit is crossed.".to_owned())
         }
-        Verdict::Never => ("No limit is reached".to_owned(), "All settles before any limit is crossed.".to_owned()),
         Verdict::NotWithin => (
             format!("No limit is reached within {}", words::duration(look_ahead)),
             "What comes later was not looked at.".to_owned(),
@@ -191,7 +211,11 @@ pub fn checks(
     }
     let heat = |joule: f64| format!("{} MJ", short(joule * 1e-6));
     let faces = balance.in_inner_j + balance.in_outer_j;
-    let (stored, passed) = if faces <= 0.0 { ("given off", "left through the faces") } else { ("taken up", "came in through the faces") };
+    let (stored, passed) = if faces <= 0.0 {
+        ("given off", "left through the faces")
+    } else {
+        ("taken up", "came in through the faces")
+    };
     let text = format!(
         "{} {stored} and {} {passed} {} until {}: they agree to {:.0e}",
         heat(balance.stored_j.abs()),

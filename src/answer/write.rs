@@ -36,10 +36,11 @@ pub fn report(item: &Item, resolved: &Resolved, about: Circumstances) -> Report 
     let course = writer.course();
     let heat_balance = writer.heat_balance();
     let effort = writer.effort();
-    let decisive = [ready_verdict, standing_verdict].into_iter().flatten().find_map(|verdict| match verdict {
-        Verdict::At { moment, .. } => Some(moment),
-        Verdict::Already { .. } | Verdict::Never | Verdict::NotWithin => None,
-    });
+    let decisive =
+        [ready_verdict, standing_verdict].into_iter().flatten().find_map(|verdict| match verdict {
+            Verdict::At { moment, .. } => Some(moment),
+            Verdict::Already { .. } | Verdict::Never | Verdict::NotWithin => None,
+        });
     let checks = words::checks(decisive, &heat_balance, &effort, about.clock);
     Report {
         stillheat: crate::scenario::VERSION,
@@ -70,7 +71,8 @@ impl Writer<'_> {
     fn headline(&self, ready: Option<&Verdict>, standing: Option<&Verdict>) -> (String, String) {
         let look_ahead = self.item.look_ahead();
         let nearest: Vec<f64> = self.resolved.followed.iter().map(|one| one.nearest).collect();
-        let stands = standing.map(|verdict| words::standing(verdict, self.first_limit(), look_ahead, self.clock));
+        let stands =
+            standing.map(|verdict| words::standing(verdict, self.first_limit(), look_ahead, self.clock));
         match (ready, stands) {
             (Some(ready), stands) => {
                 let conditions = self.item.ready_when();
@@ -102,7 +104,12 @@ impl Writer<'_> {
             .map(|(condition, _)| condition)
     }
 
-    fn conditions(&self, conditions: &[Condition], followed: &[Followed], limits: bool) -> Vec<ConditionReport> {
+    fn conditions(
+        &self,
+        conditions: &[Condition],
+        followed: &[Followed],
+        limits: bool,
+    ) -> Vec<ConditionReport> {
         let repeats = self.resolved.coarse.ending == Ending::Repeats;
         let one = |(condition, followed): (&Condition, &Followed)| {
             let verdict = all_of(std::slice::from_ref(followed), self.resolved.coarse.ending);

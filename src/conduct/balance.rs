@@ -215,7 +215,8 @@ impl<'a> Balance<'a> {
         }
         for (face, seen) in self.faces.iter().zip(seen) {
             if let Some(face) = face {
-                matrix.diagonal[face.node] += seen.heat_in(temperatures[face.node], face.area).less_per_kelvin;
+                matrix.diagonal[face.node] +=
+                    seen.heat_in(temperatures[face.node], face.area).less_per_kelvin;
             }
         }
     }

@@ -42,7 +42,9 @@ impl Linear for Tridiagonal {
         self.pivot[0] = pivot;
         let links = matrix.from_a.iter().zip(&matrix.from_b);
         let out = self.below.iter_mut().zip(&mut self.above).zip(&mut self.pivot[1..]);
-        for (((from_a, from_b), diagonal), ((below, above), next)) in links.zip(&matrix.diagonal[1..]).zip(out) {
+        for (((from_a, from_b), diagonal), ((below, above), next)) in
+            links.zip(&matrix.diagonal[1..]).zip(out)
+        {
             *below = from_a * pivot;
             *above = from_b * pivot;
             pivot = 1.0 / (diagonal - *below * from_b);

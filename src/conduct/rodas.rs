@@ -18,12 +18,14 @@ const D: [f64; 6] = [0.25, -0.1043, 0.1035, -0.036_200_000_000_000_23, 0.0, 0.0]
 const A2: [f64; 1] = [1.544];
 const A3: [f64; 2] = [0.946_678_528_081_582_6, 0.255_701_169_898_328_4];
 const A4: [f64; 3] = [3.314_825_187_068_521, 2.896_124_015_972_201, 0.998_641_913_997_781_7];
-const A5: [f64; 4] = [1.221_224_509_226_641, 6.019_134_481_288_629, 12.537_083_329_320_87, -0.687_886_036_105_895];
+const A5: [f64; 4] =
+    [1.221_224_509_226_641, 6.019_134_481_288_629, 12.537_083_329_320_87, -0.687_886_036_105_895];
 const A6: [f64; 5] = [A5[0], A5[1], A5[2], A5[3], 1.0];
 const C2: [f64; 1] = [-5.6688];
 const C3: [f64; 2] = [-2.430_093_356_833_875, -0.206_359_915_709_191_5];
 const C4: [f64; 3] = [-0.107_352_905_815_137_5, -9.594_562_251_023_355, -20.470_286_148_096_16];
-const C5: [f64; 4] = [7.496_443_313_967_647, -10.246_804_314_643_52, -33.999_903_528_199_05, 11.708_908_932_061_6];
+const C5: [f64; 4] =
+    [7.496_443_313_967_647, -10.246_804_314_643_52, -33.999_903_528_199_05, 11.708_908_932_061_6];
 const C6: [f64; 5] = [
     8.083_246_795_921_522,
     -7.981_132_988_064_893,
@@ -167,7 +169,9 @@ impl<L: Linear + Default> Rodas<L> {
         self.matrix.from_b.clone_from(&self.slope.from_b);
         self.matrix.diagonal.clear();
         let over = 1.0 / (GAMMA * dt);
-        self.matrix.diagonal.extend(self.slope.diagonal.iter().zip(&self.capacities).map(|(g, c)| g + c * over));
+        self.matrix
+            .diagonal
+            .extend(self.slope.diagonal.iter().zip(&self.capacities).map(|(g, c)| g + c * over));
         for line in &self.faces {
             if line.held {
                 self.matrix.diagonal[line.node] = 1.0;
@@ -236,7 +240,13 @@ impl<L: Linear + Default> Rodas<L> {
     }
 
     /// Where `combine` does not do: held faces, and nodes whose temperature follows from their heat.
-    fn complete<const N: usize>(&mut self, balance: &Balance<'_>, at: &Moment, seen: &[FaceNow; 2], a: [f64; N]) {
+    fn complete<const N: usize>(
+        &mut self,
+        balance: &Balance<'_>,
+        at: &Moment,
+        seen: &[FaceNow; 2],
+        a: [f64; N],
+    ) {
         for (node, heat) in balance.varying.iter().zip(&at.varying_heat) {
             let i = node.node;
             let moved: f64 = (0..N).map(|j| a[j] * self.w[j][i]).sum();
@@ -388,7 +398,13 @@ fn combine<const N: usize>(out: &mut [f64], base: &[f64], a: [f64; N], w: &[Vec<
 
 /// `out = base + weight sum a w`
 #[inline]
-fn combine_scaled<const N: usize>(out: &mut [f64], base: &[f64], weight: &[f64], a: [f64; N], w: &[Vec<f64>]) {
+fn combine_scaled<const N: usize>(
+    out: &mut [f64],
+    base: &[f64],
+    weight: &[f64],
+    a: [f64; N],
+    w: &[Vec<f64>],
+) {
     let (base, weight) = (&base[..out.len()], &weight[..out.len()]);
     let w: [&[f64]; N] = std::array::from_fn(|j| &w[j][..out.len()]);
     for i in 0..out.len() {

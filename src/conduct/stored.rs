@@ -37,12 +37,12 @@ impl VaryingNode<'_> {
                 low = at;
             }
             let mut next = at - over / self.capacity(at);
-            if !(next >= low && next <= high) {
-                next = 0.5 * (low + high);
-            }
             // Rounding of a temperature of some hundred kelvin.
             if (next - at).abs() <= 1e-13 * at.abs() {
                 return next;
+            }
+            if !(next > low && next < high) {
+                next = 0.5 * (low + high);
             }
             at = next;
         }

@@ -88,7 +88,8 @@ fn shape(scenario: &Scenario, problems: &mut Vec<Problem>) -> Shape {
     match scenario.item.shape {
         WrittenShape::Slab => {
             if inner_radius > 0.0 {
-                let words = "a slab has no inner radius; leave it out, or choose cylinder or sphere".to_owned();
+                let words =
+                    "a slab has no inner radius; leave it out, or choose cylinder or sphere".to_owned();
                 problems.push(Problem::error("/item/inner_radius_m", Trouble::Contradiction { words }));
             }
             Shape::Slab
@@ -152,7 +153,8 @@ fn steady(before: &WrittenSteadyBefore, shape: Shape, problems: &mut Vec<Problem
     let path = "/start/steady_before";
     let inner = match &before.inner {
         Some(_) if !shape.has_inner_face() => {
-            let words = "a solid has no inner face; say what its contents were kept at (contents_c)".to_owned();
+            let words =
+                "a solid has no inner face; say what its contents were kept at (contents_c)".to_owned();
             problems.push(Problem::error(format!("{path}/inner"), Trouble::Contradiction { words }));
             return None;
         }
@@ -163,9 +165,10 @@ fn steady(before: &WrittenSteadyBefore, shape: Shape, problems: &mut Vec<Problem
     let contents = before.contents_c.map(|number| kelvin(number.value()));
     let fixes = |face: &super::Face| matches!(face, super::Face::Held(_) | super::Face::Exchange { .. });
     if contents.is_none() && !fixes(&inner) && !fixes(&outer) {
-        let words = "nothing fixes a temperature, so no steady state exists; give contents_c, a held face or \
+        let words =
+            "nothing fixes a temperature, so no steady state exists; give contents_c, a held face or \
                      surroundings with a film"
-            .to_owned();
+                .to_owned();
         problems.push(Problem::error(path, Trouble::Contradiction { words }));
         return None;
     }

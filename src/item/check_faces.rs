@@ -6,7 +6,11 @@ use crate::scenario::{Number, OverTimeC, OverTimeFlux, WrittenFace};
 use crate::units::kelvin;
 
 /// The programme of a face; without rows it is insulated.
-pub(super) fn face_programme(rows: &[WrittenFace], path: &str, problems: &mut Vec<Problem>) -> Option<Programme> {
+pub(super) fn face_programme(
+    rows: &[WrittenFace],
+    path: &str,
+    problems: &mut Vec<Problem>,
+) -> Option<Programme> {
     if rows.is_empty() {
         return Some(Programme::insulated());
     }
@@ -22,7 +26,13 @@ pub(super) fn face_programme(rows: &[WrittenFace], path: &str, problems: &mut Ve
 }
 
 /// When a row begins, s; written down as a problem where it does not follow the row before.
-fn begins(row: &WrittenFace, number: usize, before: Option<f64>, path: &str, problems: &mut Vec<Problem>) -> f64 {
+fn begins(
+    row: &WrittenFace,
+    number: usize,
+    before: Option<f64>,
+    path: &str,
+    problems: &mut Vec<Problem>,
+) -> f64 {
     let place = format!("{path}/{number}/from_s");
     match (row.from_s, before) {
         (Some(from), None) if from > 0.0 => {
@@ -47,7 +57,12 @@ fn begins(row: &WrittenFace, number: usize, before: Option<f64>, path: &str, pro
 }
 
 /// One row in SI. The reader has seen to it that exactly one kind is given.
-pub(super) fn one_face(row: &WrittenFace, from: f64, path: &str, problems: &mut Vec<Problem>) -> Option<Face> {
+pub(super) fn one_face(
+    row: &WrittenFace,
+    from: f64,
+    path: &str,
+    problems: &mut Vec<Problem>,
+) -> Option<Face> {
     if let Some(held) = &row.held_c {
         return Some(Face::Held(temperature(held, from)));
     }
@@ -61,7 +76,8 @@ pub(super) fn one_face(row: &WrittenFace, from: f64, path: &str, problems: &mut 
             return Some(Face::Insulated);
         }
         let own = temperature(surroundings, from);
-        let radiation_to = row.radiation_to_c.as_ref().map_or_else(|| own.clone(), |to| temperature(to, from));
+        let radiation_to =
+            row.radiation_to_c.as_ref().map_or_else(|| own.clone(), |to| temperature(to, from));
         return Some(Face::Exchange { film, temperature: own, emissivity, radiation_to });
     }
     if row.insulated == Some(true) {
@@ -76,9 +92,10 @@ fn temperature(written: &OverTimeC, from: f64) -> OverTime {
     match written {
         OverTimeC::Number(number) => OverTime::Constant(kelvin(number.value())),
         OverTimeC::Ramp { from_c, to_c, over_s } => ramp(kelvin(*from_c), kelvin(*to_c), from, *over_s),
-        OverTimeC::Table { at_s, values_c, repeats_every_s } => {
-            table(at_s.iter().copied().zip(values_c.iter().map(|&value| kelvin(value))).collect(), *repeats_every_s)
-        }
+        OverTimeC::Table { at_s, values_c, repeats_every_s } => table(
+            at_s.iter().copied().zip(values_c.iter().map(|&value| kelvin(value))).collect(),
+            *repeats_every_s,
+        ),
         OverTimeC::Cycle { mean_c, amplitude_k, period_s, highest_at_s } => OverTime::Cycle {
             mean: kelvin(*mean_c),
             amplitude: *amplitude_k,
@@ -97,12 +114,14 @@ fn heat_flux(written: &OverTimeFlux, from: f64) -> OverTime {
         OverTimeFlux::Table { at_s, values_w_per_m2, repeats_every_s } => {
             table(at_s.iter().copied().zip(values_w_per_m2.iter().copied()).collect(), *repeats_every_s)
         }
-        OverTimeFlux::Cycle { mean_w_per_m2, amplitude_w_per_m2, period_s, highest_at_s } => OverTime::Cycle {
-            mean: *mean_w_per_m2,
-            amplitude: *amplitude_w_per_m2,
-            period: *period_s,
-            highest_at: *highest_at_s,
-        },
+        OverTimeFlux::Cycle { mean_w_per_m2, amplitude_w_per_m2, period_s, highest_at_s } => {
+            OverTime::Cycle {
+                mean: *mean_w_per_m2,
+                amplitude: *amplitude_w_per_m2,
+                period: *period_s,
+                highest_at: *highest_at_s,
+            }
+        }
     }
 }
 

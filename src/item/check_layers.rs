@@ -94,7 +94,8 @@ fn motion(written: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Op
             return Some(Motion::Mixed { film: film.value() });
         }
         (WrittenMotion::Still, Some(_)) => {
-            "a still layer has no inside film; leave it out, or set motion to self-mixing or stirred".to_owned()
+            "a still layer has no inside film; leave it out, or set motion to self-mixing or stirred"
+                .to_owned()
         }
         (WrittenMotion::SelfMixing | WrittenMotion::Stirred, None) => {
             let what = "the film between the moving contents and the layer beside them; water by its own \
@@ -135,18 +136,12 @@ fn law(written: &WrittenProperty) -> Law {
     match written {
         WrittenProperty::Number(number) => Law::Constant(number.value()),
         WrittenProperty::Table { at_c, values } => {
-            let points: Vec<(f64, f64)> = at_c.iter().map(|&at| kelvin(at)).zip(values.iter().copied()).collect();
+            let points: Vec<(f64, f64)> =
+                at_c.iter().map(|&at| kelvin(at)).zip(values.iter().copied()).collect();
             Law::table(&points)
         }
         WrittenProperty::Polynomial { polynomial_in_c, from_c, to_c } => {
-            // Written in °C, kept in the distance from its lower end (Horner's scheme, repeated).
-            let mut shifted = polynomial_in_c.clone();
-            for i in 0..shifted.len() {
-                for j in (i..shifted.len() - 1).rev() {
-                    shifted[j] += from_c * shifted[j + 1];
-                }
-            }
-            Law::polynomial(kelvin(*from_c), kelvin(*to_c), shifted)
+            Law::polynomial_about(kelvin(0.0), kelvin(*from_c), kelvin(*to_c), polynomial_in_c)
         }
     }
 }

@@ -166,7 +166,9 @@ fn probe(
     if found.is_none() {
         let names: Vec<&str> = places.probes.iter().map(|probe| probe.name.as_str()).collect();
         let trouble = match of {
-            _ if names.is_empty() => Trouble::Missing { what: "no probe exists; add one to /probes".to_owned() },
+            _ if names.is_empty() => {
+                Trouble::Missing { what: "no probe exists; add one to /probes".to_owned() }
+            }
             None => Trouble::Missing { what: format!("which probe: {}", names.join(", ")) },
             Some(of) => unknown(of, names),
         };

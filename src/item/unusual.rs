@@ -38,16 +38,19 @@ fn outside(item: &Item, number: usize, material: &Material) -> Option<Problem> {
     let (from, to) = material.range;
     let (by, end) = if high - to > from - low { (high - to, high) } else { (from - low, low) };
     (by > SLACK).then(|| {
-        Problem::warning(format!("/item/layers/{number}/material"), Trouble::Unusual {
-            words: format!(
-                "{} may come to {}; its properties are known from {} to {}",
-                material.name,
-                words::temperature(end),
-                words::temperature(from),
-                words::temperature(to),
-            ),
-            hint: "Outside that range they are held at its end.".to_owned(),
-        })
+        Problem::warning(
+            format!("/item/layers/{number}/material"),
+            Trouble::Unusual {
+                words: format!(
+                    "{} may come to {}; its properties are known from {} to {}",
+                    material.name,
+                    words::temperature(end),
+                    words::temperature(from),
+                    words::temperature(to),
+                ),
+                hint: "Outside that range they are held at its end.".to_owned(),
+            },
+        )
     })
 }
 

@@ -59,7 +59,11 @@ fn add_layer(mesh: &mut Mesh, line: &Line, number: usize, inside: f64) {
     let first = if joined { mesh.nodes() - 1 } else { mesh.nodes() };
     if number > 0 && !joined {
         let area = area(line.shape, radius + inside);
-        mesh.links.push(Link { a: first - 1, b: first, through: Through::Joint { inside: number - 1, area } });
+        mesh.links.push(Link {
+            a: first - 1,
+            b: first,
+            through: Through::Joint { inside: number - 1, area },
+        });
     }
     if layer.mixed {
         mesh.places.push(inside + 0.5 * layer.thickness);
@@ -174,7 +178,11 @@ mod tests {
         let shapes = [
             (Shape::Slab, 0.59, 1.0),
             (Shape::Cylinder { inner_radius: 0.0 }, PI * 0.59 * 0.59, 2.0 * PI * 0.59),
-            (Shape::Sphere { inner_radius: 0.1 }, 4.0 / 3.0 * PI * (0.69f64.powi(3) - 0.001), 4.0 * PI * 0.69 * 0.69),
+            (
+                Shape::Sphere { inner_radius: 0.1 },
+                4.0 / 3.0 * PI * (0.69f64.powi(3) - 0.001),
+                4.0 * PI * 0.69 * 0.69,
+            ),
         ];
         for (shape, whole, outer) in shapes {
             let mesh = line(&Line { shape, layers: layers(7), active: [false, true] });

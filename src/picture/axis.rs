@@ -38,9 +38,30 @@ const HOUR: f64 = 3_600.0;
 const DAY: f64 = 86_400.0;
 /// Steps in which people read a clock or a calendar, s.
 const STEPS: [f64; 24] = [
-    1.0, 2.0, 5.0, 10.0, 30.0, MINUTE, 2.0 * MINUTE, 5.0 * MINUTE, 10.0 * MINUTE, 30.0 * MINUTE, HOUR, 2.0 * HOUR,
-    3.0 * HOUR, 6.0 * HOUR, 12.0 * HOUR, DAY, 2.0 * DAY, 5.0 * DAY, 10.0 * DAY, 30.0 * DAY, 90.0 * DAY, 365.0 * DAY,
-    1_825.0 * DAY, 3_650.0 * DAY,
+    1.0,
+    2.0,
+    5.0,
+    10.0,
+    30.0,
+    MINUTE,
+    2.0 * MINUTE,
+    5.0 * MINUTE,
+    10.0 * MINUTE,
+    30.0 * MINUTE,
+    HOUR,
+    2.0 * HOUR,
+    3.0 * HOUR,
+    6.0 * HOUR,
+    12.0 * HOUR,
+    DAY,
+    2.0 * DAY,
+    5.0 * DAY,
+    10.0 * DAY,
+    30.0 * DAY,
+    90.0 * DAY,
+    365.0 * DAY,
+    1_825.0 * DAY,
+    3_650.0 * DAY,
 ];
 
 /// Times of ticks from 0 to `end`, about `count` of them, each with its label.

@@ -83,7 +83,10 @@ pub fn curve(on: &mut dyn Painter, width: f64, height: f64, theme: Theme, what: 
     }
     if let Some(cursor) = what.cursor {
         let x = field.across(cursor.clamp(0.0, end));
-        on.line(&[(x, field.top), (x, field.bottom)], Stroke { colour: inks.ink, width: 1.0, dash: &[2.0, 3.0] });
+        on.line(
+            &[(x, field.top), (x, field.bottom)],
+            Stroke { colour: inks.ink, width: 1.0, dash: &[2.0, 3.0] },
+        );
     }
     marks(on, &field, what, &inks);
     name_lines(on, &field, shown, labels, &inks);
@@ -93,7 +96,8 @@ pub fn curve(on: &mut dyn Painter, width: f64, height: f64, theme: Theme, what: 
 fn extent(lines: &[CurveLine], limits: &[(f64, String)]) -> (f64, f64) {
     let values = lines.iter().flat_map(|line| line.values.iter().copied());
     let all = values.chain(limits.iter().map(|limit| limit.0));
-    let (low, high) = all.fold((f64::INFINITY, f64::NEG_INFINITY), |(low, high), v| (low.min(v), high.max(v)));
+    let (low, high) =
+        all.fold((f64::INFINITY, f64::NEG_INFINITY), |(low, high), v| (low.min(v), high.max(v)));
     let room = (0.06 * (high - low)).max(0.5);
     if low <= high { (low - room, high + room) } else { (0.0, 1.0) }
 }
@@ -171,7 +175,8 @@ fn marks(on: &mut dyn Painter, field: &Field, what: &Curve, inks: &Inks) {
 }
 
 fn name_lines(on: &mut dyn Painter, field: &Field, lines: &[CurveLine], room: f64, inks: &Inks) {
-    let ends: Vec<f64> = lines.iter().map(|line| field.up(line.values.last().copied().unwrap_or(0.0))).collect();
+    let ends: Vec<f64> =
+        lines.iter().map(|line| field.up(line.values.last().copied().unwrap_or(0.0))).collect();
     let places = spread(&ends, 16.0, field.top + 6.0, field.bottom - 2.0);
     for (i, line) in lines.iter().enumerate() {
         let set = Type { size: SMALL, bold: true, anchor: Anchor::Start, colour: inks.lines[i] };

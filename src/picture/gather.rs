@@ -7,7 +7,8 @@ use super::table::Table;
 use crate::Solved;
 use crate::answer::Outcome;
 use crate::item::{Condition, Region, Sense, Shape, Side, Watch};
-use crate::units::display::{Display, length_words};
+use crate::units::display::length_words;
+use crate::units::quantity::System;
 use crate::units::words;
 
 /// Times at which curves are read.
@@ -16,23 +17,23 @@ const POINTS: usize = 160;
 /// An answer, ready to be shown in some units.
 pub struct Shown<'a> {
     solved: &'a Solved,
-    display: Display,
+    system: System,
     /// Coldest and hottest of the whole course, in the unit shown.
     extent: (f64, f64),
 }
 
 impl<'a> Shown<'a> {
     /// Looks through the whole course once.
-    pub fn new(solved: &'a Solved, display: Display) -> Self {
+    pub fn new(solved: &'a Solved, system: System) -> Self {
         let history = &solved.resolved.fine.history;
         let mut extent = (f64::INFINITY, f64::NEG_INFINITY);
         for time in [0.0].iter().chain(history.times()) {
             for kelvin in history.temperatures(*time) {
-                let shown = display.temperature(kelvin);
+                let shown = system.temperature(kelvin);
                 extent = (extent.0.min(shown), extent.1.max(shown));
             }
         }
-        Self { solved, display, extent }
+        Self { solved, system, extent }
     }
 
     /// End of what can be shown, s.
@@ -43,7 +44,7 @@ impl<'a> Shown<'a> {
     /// Temperatures of all nodes at a moment, in the unit shown.
     pub fn temperatures(&self, time: f64) -> Vec<f64> {
         let kelvin = self.solved.resolved.fine.history.temperatures(time);
-        kelvin.into_iter().map(|kelvin| self.display.temperature(kelvin)).collect()
+        kelvin.into_iter().map(|kelvin| self.system.temperature(kelvin)).collect()
     }
 
     /// The item cut open; `temperatures` are those of the moment.
@@ -55,7 +56,7 @@ impl<'a> Shown<'a> {
         let layers = item.layers().iter().zip(&history.mesh().layers).map(|(layer, nodes)| {
             let edges = (from, from + layer.thickness);
             from = edges.1;
-            let thickness = length_words(layer.thickness, self.display);
+            let thickness = length_words(layer.thickness, self.system);
             SectionLayer { name: layer.name.clone(), thickness, nodes: *nodes, edges }
         });
         Section {
@@ -63,7 +64,7 @@ impl<'a> Shown<'a> {
             layers: layers.collect(),
             places: history.places().iter().map(|place| inner + place).collect(),
             temperatures,
-            unit: self.display.temperature_unit(),
+            unit: self.system.temperature_unit(),
             extent: self.extent,
         }
     }
@@ -76,16 +77,16 @@ impl<'a> Shown<'a> {
         let layers = item.layers().iter().zip(&history.mesh().layers).map(|(layer, nodes)| {
             let edges = (from, from + layer.thickness);
             from = edges.1;
-            let shown = (self.display.length(edges.0), self.display.length(edges.1));
+            let shown = (self.system.length(edges.0), self.system.length(edges.1));
             (layer.name.clone(), *nodes, shown)
         });
         Profile {
             layers: layers.collect(),
-            places: history.places().iter().map(|place| self.display.length(*place)).collect(),
+            places: history.places().iter().map(|place| self.system.length(*place)).collect(),
             now,
             start,
-            unit: self.display.temperature_unit(),
-            length_unit: self.display.length_unit(),
+            unit: self.system.temperature_unit(),
+            length_unit: self.system.length_unit(),
             extent: self.extent,
         }
     }
@@ -103,10 +104,7 @@ impl<'a> Shown<'a> {
         let history = &self.solved.resolved.fine.history;
         let lines = self.watched().into_iter().map(|(name, watch)| CurveLine {
             name,
-            values: times
-                .iter()
-                .map(|time| self.display.temperature(history.watch(&watch, *time)))
-                .collect(),
+            values: times.iter().map(|time| self.system.temperature(history.watch(&watch, *time))).collect(),
         });
         Curve {
             lines: lines.collect(),
@@ -114,7 +112,7 @@ impl<'a> Shown<'a> {
             marks: self.marks(),
             cursor,
             clock: self.solved.checked.clock,
-            unit: self.display.temperature_unit(),
+            unit: self.system.temperature_unit(),
             times,
         }
     }
@@ -160,8 +158,9 @@ impl<'a> Shown<'a> {
                 Sense::Below => "below",
                 Sense::Above => "above",
             };
-            let value = self.display.temperature(condition.limit);
-            let words = format!("{} {side} {}", condition.subject, self.display.temperature_words(condition.limit));
+            let value = self.system.temperature(condition.limit);
+            let words =
+                format!("{} {side} {}", condition.subject, self.system.temperature_words(condition.limit));
             if !all.iter().any(|other| (other.0 - value).abs() < 1e-9) {
                 all.push((value, words));
             }

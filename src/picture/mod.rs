@@ -23,7 +23,7 @@ pub use table::Table;
 
 use crate::Solved;
 use crate::answer::Outcome;
-use crate::units::display::Display;
+use crate::units::quantity::System;
 
 /// The pictures there are.
 pub const NAMES: [&str; 3] = ["section", "curve", "profile"];
@@ -60,7 +60,7 @@ pub fn as_svg(name: &str, size: (f64, f64), shown: &Shown<'_>, time: f64) -> Str
 
 /// All pictures of an answer as (name, SVG), at the moment that was asked for.
 pub fn sheets(solved: &Solved) -> Vec<(&'static str, String)> {
-    let shown = Shown::new(solved, Display::Metric);
+    let shown = Shown::new(solved, System::Metric);
     let asked = [&solved.report.ready, &solved.report.standing].into_iter().flatten();
     let time = asked.filter_map(|outcome| match outcome {
         Outcome::At { time_s, .. } => Some(*time_s),

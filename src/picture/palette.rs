@@ -42,7 +42,12 @@ impl Theme {
                 soft: Colour(169, 179, 172),
                 grid: Colour(54, 61, 57),
                 paper: Colour(27, 32, 29),
-                lines: [Colour(95, 199, 177), Colour(240, 170, 110), Colour(150, 175, 250), Colour(215, 165, 230)],
+                lines: [
+                    Colour(95, 199, 177),
+                    Colour(240, 170, 110),
+                    Colour(150, 175, 250),
+                    Colour(215, 165, 230),
+                ],
             },
         }
     }

@@ -54,7 +54,8 @@ fn line(on: &mut dyn Painter, field: &Field, what: &Profile<'_>, temperatures: &
             let y = field.up(temperatures[*first]);
             points.extend([(field.across(*from), y), (field.across(*to), y)]);
         } else {
-            points.extend((*first..=*last).map(|i| (field.across(what.places[i]), field.up(temperatures[i]))));
+            points
+                .extend((*first..=*last).map(|i| (field.across(what.places[i]), field.up(temperatures[i]))));
         }
     }
     on.line(&points, stroke);
@@ -83,7 +84,10 @@ fn lengths(on: &mut dyn Painter, field: &Field, what: &Profile<'_>, inks: &Inks)
     let last = values.len().saturating_sub(1);
     for (i, value) in values.into_iter().enumerate() {
         let x = field.across(value);
-        on.line(&[(x, field.bottom), (x, field.bottom + 4.0)], Stroke { colour: inks.soft, width: 1.0, dash: &[] });
+        on.line(
+            &[(x, field.bottom), (x, field.bottom + 4.0)],
+            Stroke { colour: inks.soft, width: 1.0, dash: &[] },
+        );
         let text = number(value, step);
         let text = if i == last { format!("{text} {}", what.length_unit) } else { text };
         let half = 0.5 * on.width_of(&text, set(Anchor::Middle));

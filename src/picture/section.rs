@@ -54,7 +54,8 @@ pub fn section(on: &mut dyn Painter, width: f64, height: f64, theme: Theme, what
     let labels = (0.46 * width).clamp(120.0, 240.0);
     let scale_height = 34.0;
     let side = (width - labels - 14.0).min(height - scale_height - 10.0).max(60.0);
-    let body = Body { left: 2.0, top: 6.0, side, outer: what.layers.last().map_or(1.0, |layer| layer.edges.1) };
+    let body =
+        Body { left: 2.0, top: 6.0, side, outer: what.layers.last().map_or(1.0, |layer| layer.edges.1) };
     for layer in what.layers.iter().rev() {
         shade(on, &body, what, layer);
     }
@@ -106,7 +107,8 @@ fn shade(on: &mut dyn Painter, body: &Body, what: &Section<'_>, layer: &SectionL
             Outline::Flat => {
                 let left = body.left + body.length(part(i));
                 // Half a pixel over the neighbour, so that no paper shows between them.
-                let wide = body.length(part(i + 1)) - body.length(part(i)) + if i + 1 < strips { 0.5 } else { 0.0 };
+                let wide =
+                    body.length(part(i + 1)) - body.length(part(i)) + if i + 1 < strips { 0.5 } else { 0.0 };
                 rectangle(on, left, body.top, wide, body.side, colour);
             }
             Outline::Round => {
@@ -199,7 +201,11 @@ fn said(what: &Section<'_>, layer: &SectionLayer) -> String {
     let (inside, outside) = (what.temperatures[layer.nodes.0], what.temperatures[layer.nodes.1]);
     let (a, b) = (tenth(inside), tenth(outside));
     let unit = what.unit;
-    if a == b { format!("{}, {a} {unit}", layer.thickness) } else { format!("{}, {a} to {b} {unit}", layer.thickness) }
+    if a == b {
+        format!("{}, {a} {unit}", layer.thickness)
+    } else {
+        format!("{}, {a} to {b} {unit}", layer.thickness)
+    }
 }
 
 /// To a tenth.

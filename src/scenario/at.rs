@@ -54,7 +54,8 @@ impl<'a> At<'a> {
     /// Have two lists the same length? Writes it down where not.
     pub fn same_length(&self, one: &str, length: usize, other: &str, other_length: usize) -> bool {
         if length != other_length {
-            let words = format!("{one} has {length} entries and {other} has {other_length}; they go in pairs");
+            let words =
+                format!("{one} has {length} entries and {other} has {other_length}; they go in pairs");
             self.problem(Trouble::Contradiction { words });
         }
         length == other_length
@@ -100,14 +101,26 @@ impl<'a> At<'a> {
     }
 
     /// A list of numbers within their limits.
-    pub fn numbers(&self, what: &'static str, least: usize, most: usize, limit: &'static Limit) -> Option<Vec<f64>> {
+    pub fn numbers(
+        &self,
+        what: &'static str,
+        least: usize,
+        most: usize,
+        limit: &'static Limit,
+    ) -> Option<Vec<f64>> {
         let all: Vec<Option<f64>> =
             self.list(what, least, most)?.iter().map(|one| one.number(limit)).collect();
         all.into_iter().collect()
     }
 
     /// A list of numbers, each above the one before.
-    pub fn ascending(&self, what: &'static str, least: usize, most: usize, limit: &'static Limit) -> Option<Vec<f64>> {
+    pub fn ascending(
+        &self,
+        what: &'static str,
+        least: usize,
+        most: usize,
+        limit: &'static Limit,
+    ) -> Option<Vec<f64>> {
         let all = self.numbers(what, least, most, limit)?;
         if let Some(i) = all.windows(2).position(|pair| pair[0] >= pair[1]) {
             let words = format!("{} comes after {}; {what} must ascend", all[i + 1], all[i]);
@@ -129,7 +142,8 @@ impl<'a> At<'a> {
         let high = part("high", "hardly higher than this");
         let (value, low, high) = (value?, low?, high?);
         if !(low <= value && value <= high) {
-            let words = format!("low {low}, value {value}, high {high}: the value must lie between low and high");
+            let words =
+                format!("low {low}, value {value}, high {high}: the value must lie between low and high");
             self.problem(Trouble::Contradiction { words });
             return None;
         }
@@ -161,7 +175,11 @@ impl<'a> At<'a> {
 
     /// True; left out says the contrary.
     pub fn only_true(&self) -> Option<bool> {
-        if self.value == &Value::Bool(true) { Some(true) } else { self.wrong("true (leave it out otherwise)") }
+        if self.value == &Value::Bool(true) {
+            Some(true)
+        } else {
+            self.wrong("true (leave it out otherwise)")
+        }
     }
 
     /// A whole number.

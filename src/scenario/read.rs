@@ -11,13 +11,29 @@ use crate::problem::{Limit, Problem, Trouble};
 use std::cell::RefCell;
 
 pub(super) const SCENARIO: &[&str] = &[
-    "stillheat", "title", "notes", "stopped_at", "look_ahead_s", "item", "start", "surroundings", "probes",
-    "ready_when", "must_not",
+    "stillheat",
+    "title",
+    "notes",
+    "stopped_at",
+    "look_ahead_s",
+    "item",
+    "start",
+    "surroundings",
+    "probes",
+    "ready_when",
+    "must_not",
 ];
 pub(super) const ITEM: &[&str] = &["shape", "inner_radius_m", "layers"];
 pub(super) const LAYER: &[&str] = &[
-    "name", "material", "thickness_m", "density_kg_per_m3", "heat_capacity_j_per_kg_k", "conductivity_w_per_m_k",
-    "motion", "inside_film_w_per_m2_k", "contact_m2_k_per_w",
+    "name",
+    "material",
+    "thickness_m",
+    "density_kg_per_m3",
+    "heat_capacity_j_per_kg_k",
+    "conductivity_w_per_m_k",
+    "motion",
+    "inside_film_w_per_m2_k",
+    "contact_m2_k_per_w",
 ];
 pub(super) const PROPERTY_TABLE: &[&str] = &["at_c", "values"];
 pub(super) const PROPERTY_POLYNOMIAL: &[&str] = &["polynomial_in_c", "from_c", "to_c"];
@@ -25,8 +41,7 @@ pub(super) const START: &[&str] = &["uniform_c", "per_layer_c", "profile", "stea
 pub(super) const PROFILE_POINT: &[&str] = &["from_inside_m", "temperature_c"];
 pub(super) const STEADY_BEFORE: &[&str] = &["contents_c", "inner", "outer"];
 pub(super) const PROBE: &[&str] = &["name", "from_inside_m", "from_outside_m"];
-pub(super) const CONDITION: &[&str] =
-    &["what", "of", "below_c", "above_c", "below_k", "below_k_per_h"];
+pub(super) const CONDITION: &[&str] = &["what", "of", "below_c", "above_c", "below_k", "below_k_per_h"];
 
 /// Reads a scenario.
 ///
@@ -60,9 +75,9 @@ fn scenario(at: &At<'_>) -> Option<Scenario> {
     let ready_when = conditions("ready_when", "conditions");
     let must_not = conditions("must_not", "limits");
     let probes = match fields.get("probes") {
-        Some(at) => at
-            .list("probes", 0, limit::PROBES)
-            .and_then(|list| all(list.iter().map(probe).collect())),
+        Some(at) => {
+            at.list("probes", 0, limit::PROBES).and_then(|list| all(list.iter().map(probe).collect()))
+        }
         None => Some(Vec::new()),
     };
     Some(Scenario {
@@ -129,9 +144,9 @@ fn layer(at: &At<'_>) -> Option<WrittenLayer> {
         ("self-mixing", WrittenMotion::SelfMixing),
         ("stirred", WrittenMotion::Stirred),
     ];
-    let thickness = fields.needed("thickness_m", "how thick the layer is").and_then(|at| at.spread(&limit::THICKNESS));
-    let property =
-        |key, limit: &'static Limit| fields.get(key).and_then(|at| property(&at, limit));
+    let thickness =
+        fields.needed("thickness_m", "how thick the layer is").and_then(|at| at.spread(&limit::THICKNESS));
+    let property = |key, limit: &'static Limit| fields.get(key).and_then(|at| property(&at, limit));
     let layer = WrittenLayer {
         name: fields.get("name").and_then(|at| at.text(limit::NAME_LETTERS)),
         material: fields.get("material").and_then(|at| at.text(limit::NAME_LETTERS)),
@@ -156,7 +171,9 @@ fn property(at: &At<'_>, limits: &'static Limit) -> Option<WrittenProperty> {
             .needed("values", "a value for each temperature")
             .and_then(|at| at.numbers("values", 2, limit::PROPERTY_POINTS, limits));
         let (at_c, values) = (at_c?, values?);
-        return at.same_length("at_c", at_c.len(), "values", values.len()).then_some(WrittenProperty::Table { at_c, values });
+        return at
+            .same_length("at_c", at_c.len(), "values", values.len())
+            .then_some(WrittenProperty::Table { at_c, values });
     }
     if at.has("polynomial_in_c") || at.has("from_c") || at.has("to_c") {
         let fields = at.fields("a polynomial", PROPERTY_POLYNOMIAL)?;
@@ -165,7 +182,8 @@ fn property(at: &At<'_>, limits: &'static Limit) -> Option<WrittenProperty> {
             .and_then(|at| at.numbers("coefficients", 1, limit::COEFFICIENTS, &limit::COEFFICIENT));
         let from_c =
             fields.needed("from_c", "where its range begins").and_then(|at| at.number(&limit::TEMPERATURE));
-        let to_c = fields.needed("to_c", "where its range ends").and_then(|at| at.number(&limit::TEMPERATURE));
+        let to_c =
+            fields.needed("to_c", "where its range ends").and_then(|at| at.number(&limit::TEMPERATURE));
         let (polynomial_in_c, from_c, to_c) = (polynomial_in_c?, from_c?, to_c?);
         if from_c >= to_c {
             let words = format!("from_c {from_c} is not below to_c {to_c}");
@@ -193,7 +211,8 @@ fn start(at: &At<'_>) -> Option<WrittenStart> {
         let list = at.list("temperatures", 1, limit::LAYERS)?;
         all(list.iter().map(|at| at.spread(&limit::TEMPERATURE)).collect())
     };
-    let points = |at: At<'_>| all(at.list("points", 1, limit::PROPERTY_POINTS)?.iter().map(profile_point).collect());
+    let points =
+        |at: At<'_>| all(at.list("points", 1, limit::PROPERTY_POINTS)?.iter().map(profile_point).collect());
     let start = WrittenStart {
         uniform_c: fields.get("uniform_c").and_then(|at| at.spread(&limit::TEMPERATURE)),
         per_layer_c: fields.get("per_layer_c").and_then(temperatures),
@@ -222,7 +241,8 @@ fn steady_before(at: &At<'_>) -> Option<WrittenSteadyBefore> {
     let inner = fields.get("inner").and_then(|at| read_faces::face(&at));
     let outer = fields.needed("outer", "what the outer face saw").and_then(|at| read_faces::face(&at));
     if at.has("contents_c") && at.has("inner") {
-        let words = "contents_c and inner are both given; what keeps the contents hot can be only one".to_owned();
+        let words =
+            "contents_c and inner are both given; what keeps the contents hot can be only one".to_owned();
         at.problem(Trouble::Contradiction { words });
     }
     Some(WrittenSteadyBefore { contents_c, inner, outer: outer? })

@@ -7,7 +7,13 @@ use crate::problem::{Limit, Trouble};
 
 pub(super) const SURROUNDINGS: &[&str] = &["inner", "outer"];
 pub(super) const FACE: &[&str] = &[
-    "from_s", "insulated", "held_c", "heat_flux_into_w_per_m2", "temperature_c", "film_w_per_m2_k", "emissivity",
+    "from_s",
+    "insulated",
+    "held_c",
+    "heat_flux_into_w_per_m2",
+    "temperature_c",
+    "film_w_per_m2_k",
+    "emissivity",
     "radiation_to_c",
 ];
 
@@ -46,7 +52,9 @@ enum Varying {
 pub(super) fn surroundings(at: &At<'_>) -> Option<WrittenSurroundings> {
     let fields = at.fields("an object with inner and outer", SURROUNDINGS)?;
     let rows = |key| match fields.get(key) {
-        Some(at) => at.list("rows", 0, limit::ROWS)?.iter().map(face).collect::<Vec<_>>().into_iter().collect(),
+        Some(at) => {
+            at.list("rows", 0, limit::ROWS)?.iter().map(face).collect::<Vec<_>>().into_iter().collect()
+        }
         None => Some(Vec::new()),
     };
     let (inner, outer) = (rows("inner"), rows("outer"));
@@ -58,7 +66,8 @@ pub(super) fn face(at: &At<'_>) -> Option<WrittenFace> {
     let sound = one_kind(at);
     let celsius = |key| fields.get(key).map(|at| over_time_c(&at));
     let flux = fields.get("heat_flux_into_w_per_m2").map(|at| over_time_flux(&at));
-    let (held, temperature, radiation) = (celsius("held_c"), celsius("temperature_c"), celsius("radiation_to_c"));
+    let (held, temperature, radiation) =
+        (celsius("held_c"), celsius("temperature_c"), celsius("radiation_to_c"));
     let face = WrittenFace {
         from_s: fields.get("from_s").and_then(|at| at.number(&limit::TIME)),
         insulated: fields.get("insulated").and_then(|at| at.only_true()),
@@ -79,11 +88,13 @@ fn one_kind(at: &At<'_>) -> bool {
     let exchange = ["film_w_per_m2_k", "emissivity", "radiation_to_c"];
     let words = match given.as_slice() {
         [] if exchange.iter().any(|key| at.has(key)) => {
-            "film_w_per_m2_k or emissivity without temperature_c; say how warm the surroundings are".to_owned()
+            "film_w_per_m2_k or emissivity without temperature_c; say how warm the surroundings are"
+                .to_owned()
         }
         [] => format!("nothing says what the face sees; one of {}", kinds.join(", ")),
         ["temperature_c"] if !at.has("film_w_per_m2_k") && !at.has("emissivity") => {
-            "temperature_c needs film_w_per_m2_k or emissivity or both; held_c holds the face itself".to_owned()
+            "temperature_c needs film_w_per_m2_k or emissivity or both; held_c holds the face itself"
+                .to_owned()
         }
         ["temperature_c"] if at.has("radiation_to_c") && !at.has("emissivity") => {
             "radiation_to_c without emissivity; say how well the face radiates".to_owned()
@@ -155,7 +166,8 @@ fn varying(at: &At<'_>, keys: &'static Keys) -> Option<Option<Varying>> {
 fn ramp(fields: &Fields<'_>, keys: &Keys) -> Option<Varying> {
     let from = fields.needed(keys.ramp[0], "where the ramp begins").and_then(|at| at.number(keys.value));
     let to = fields.needed(keys.ramp[1], "where the ramp ends").and_then(|at| at.number(keys.value));
-    let over = fields.needed(keys.ramp[2], "how long the ramp takes").and_then(|at| at.number(&limit::DURATION));
+    let over =
+        fields.needed(keys.ramp[2], "how long the ramp takes").and_then(|at| at.number(&limit::DURATION));
     Some(Varying::Ramp { from: from?, to: to?, over: over? })
 }
 
@@ -186,8 +198,10 @@ fn cycle(fields: &Fields<'_>, keys: &Keys) -> Option<Varying> {
     let mean = fields.needed(keys.cycle[0], "the mean").and_then(|at| at.number(keys.value));
     let amplitude =
         fields.needed(keys.cycle[1], "half of highest minus lowest").and_then(|at| at.number(keys.amplitude));
-    let period =
-        fields.needed(keys.cycle[2], "the period; a day has 86400 s").and_then(|at| at.number(&limit::PERIOD));
-    let highest_at = fields.needed(keys.cycle[3], "when it is highest").and_then(|at| at.number(&limit::WHEN));
+    let period = fields
+        .needed(keys.cycle[2], "the period; a day has 86400 s")
+        .and_then(|at| at.number(&limit::PERIOD));
+    let highest_at =
+        fields.needed(keys.cycle[3], "when it is highest").and_then(|at| at.number(&limit::WHEN));
     Some(Varying::Cycle { mean: mean?, amplitude: amplitude?, period: period?, highest_at: highest_at? })
 }

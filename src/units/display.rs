@@ -1,26 +1,18 @@
 //! Numbers as pictures show them: two sets of units.
 
 use super::celsius;
+use super::quantity::System;
 use super::words;
-
-/// Which units are shown.
-#[derive(Clone, Copy, Debug, PartialEq, Eq)]
-pub enum Display {
-    /// °C and mm.
-    Metric,
-    /// °F and in.
-    UsCustomary,
-}
 
 /// 1 in = 25.4 mm, exact (international yard and pound agreement 1959).
 const INCH: f64 = 0.0254;
 
-impl Display {
+impl System {
     /// A temperature in K as the number shown.
     pub fn temperature(self, kelvin: f64) -> f64 {
         match self {
             Self::Metric => celsius(kelvin),
-            Self::UsCustomary => celsius(kelvin) * 1.8 + 32.0,
+            Self::Us => celsius(kelvin) * 1.8 + 32.0,
         }
     }
 
@@ -28,7 +20,7 @@ impl Display {
     pub fn temperature_unit(self) -> &'static str {
         match self {
             Self::Metric => "°C",
-            Self::UsCustomary => "°F",
+            Self::Us => "°F",
         }
     }
 
@@ -36,7 +28,7 @@ impl Display {
     pub fn temperature_words(self, kelvin: f64) -> String {
         match self {
             Self::Metric => words::temperature(kelvin),
-            Self::UsCustomary => format!("{:.0} °F", self.temperature(kelvin)),
+            Self::Us => format!("{:.0} °F", self.temperature(kelvin)),
         }
     }
 
@@ -44,7 +36,7 @@ impl Display {
     pub fn length(self, metre: f64) -> f64 {
         match self {
             Self::Metric => metre * 1e3,
-            Self::UsCustomary => metre / INCH,
+            Self::Us => metre / INCH,
         }
     }
 
@@ -52,14 +44,14 @@ impl Display {
     pub fn length_unit(self) -> &'static str {
         match self {
             Self::Metric => "mm",
-            Self::UsCustomary => "in",
+            Self::Us => "in",
         }
     }
 }
 
 /// A length in m in words, to three digits: "400 mm", "0.315 in".
-pub fn length_words(metre: f64, display: Display) -> String {
-    let shown = display.length(metre);
+pub fn length_words(metre: f64, system: System) -> String {
+    let shown = system.length(metre);
     let text = if shown >= 100.0 {
         format!("{shown:.0}")
     } else if shown >= 10.0 {
@@ -69,6 +61,7 @@ pub fn length_words(metre: f64, display: Display) -> String {
     } else {
         format!("{shown:.3}")
     };
-    let text = if text.contains('.') { text.trim_end_matches('0').trim_end_matches('.').to_owned() } else { text };
-    format!("{text} {}", display.length_unit())
+    let text =
+        if text.contains('.') { text.trim_end_matches('0').trim_end_matches('.').to_owned() } else { text };
+    format!("{text} {}", system.length_unit())
 }

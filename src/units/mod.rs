@@ -5,6 +5,8 @@
 
 pub mod clock;
 pub mod display;
+pub mod pairs;
+pub mod quantity;
 pub mod words;
 
 /// 0 °C in K, exact (SI brochure, 9th edition, 2019, section 2.3.1).

@@ -20,7 +20,7 @@ const answer = {
 
   now() {
     const text = JSON.stringify(model.scenario);
-    const solution = core.page.solve(text, core.us);
+    const solution = core.page.solve(text);
     const drafts = model.drafts.size;
     const errors = solution.problems.filter((one) => one.severity === "error");
     const homeless = fields.place(solution.problems.concat(solution.report?.warnings ?? []));

@@ -27,7 +27,7 @@ const files = {
     const item = scenario?.item;
     const shaped = scenario !== null && typeof scenario === "object" && scenario.stillheat !== undefined && Array.isArray(item?.layers);
     if (!shaped) {
-      const problem = core.page.solve(text, core.us).problems[0];
+      const problem = core.page.solve(text).problems[0];
       const words = problem ? `${problem.path} ${problem.message}. ${problem.hint}` : "this is no scenario";
       answer.text("announce", `${name} was not opened: ${words}`);
       const place = /** @type {HTMLElement} */ (document.getElementById("answer-problems"));
