@@ -158,8 +158,9 @@ const fields = {
       const pairs = wasm_bindgen.read_pairs(text, "duration", kind, core.us);
       if (pairs.problem !== undefined) return { problem: pairs.problem };
       const before = model.get(path);
-      const kept = before?.repeats_every_s === undefined ? {} : { repeats_every_s: before.repeats_every_s };
-      return { value: { at_s: pairs.at ?? [], [element.dataset["table"] ?? ""]: pairs.values ?? [], ...kept } };
+      const table = /** @type {{ [key: string]: Json }} */ ({ at_s: pairs.at ?? [], [element.dataset["table"] ?? ""]: pairs.values ?? [] });
+      if (before?.repeats_every_s !== undefined) table["repeats_every_s"] = before.repeats_every_s;
+      return { value: table };
     }
     if (element.dataset["property"] !== undefined && text.includes(":")) {
       const pairs = wasm_bindgen.read_pairs(text, "temperature", kind, core.us);

@@ -34,6 +34,8 @@ pub fn build(root: &Path) -> Result<Core, Box<dyn Error>> {
         .no_modules(true)?
         .omit_default_module_path(true)
         .typescript(false)
+        .remove_name_section(true)
+        .remove_producers_section(true)
         .generate(&glue_folder)?;
     Ok(Core {
         wasm: std::fs::read(glue_folder.join("stillheat_bg.wasm"))?,
