@@ -1,7 +1,7 @@
 //! One temperature throughout.
 //!
 //! Holds where the inside conducts far better than the face gives off: Biot number (volume over area) below
-//! 0.1. Source: any heat-transfer text; Incropera and DeWitt 2002, sections 5.1 to 5.3.
+//! 0.1. Source: any heat-transfer text; Incropera et al. 2007, sections 5.1 to 5.3.
 
 use super::numbers::STEFAN_BOLTZMANN;
 
@@ -19,7 +19,7 @@ pub fn exponential_time(capacity: f64, resistance: f64, start: f64, limit: f64, 
 /// Time in which a body comes from `start` to `limit` by radiation alone, s; temperatures K.
 ///
 /// `capacity` J/K, `area` m² (times emissivity). `limit` lies between `start` and `surroundings`.
-/// Source: Incropera and DeWitt 2002, equations 5.18 and 5.19 (towards 0 K).
+/// Source: Incropera et al. 2007, equations 5.18 and 5.19 (towards 0 K).
 pub fn radiation_time(capacity: f64, area: f64, start: f64, limit: f64, surroundings: f64) -> f64 {
     let per_kelvin = capacity / (area * STEFAN_BOLTZMANN);
     if surroundings <= 0.0 {

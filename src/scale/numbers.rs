@@ -4,7 +4,7 @@
 pub const STEFAN_BOLTZMANN: f64 = 5.670_374_419e-8;
 
 /// Below this Biot number (on volume over area) a body has nearly one temperature: the error of the
-/// temperature is below 5 %. Source: Incropera and DeWitt 2002, section 5.2.
+/// temperature is below 5 %. Source: Incropera et al. 2007, section 5.2.
 pub const LUMPED_BELOW: f64 = 0.1;
 
 /// Above this Fourier number one term of the series is enough: the error is below 2 %. Source: Heisler 1947.

@@ -43,6 +43,12 @@ impl OneTerm {
         Self { body, root, coefficient: coefficient(body, root) }
     }
 
+    /// The second term, likewise.
+    pub fn second(body: Body, biot: f64) -> Self {
+        let root = second_root(body, biot);
+        Self { body, root, coefficient: coefficient(body, root) }
+    }
+
     /// First term at Fo = 0 at the place `xi`.
     pub fn at(&self, xi: f64) -> f64 {
         self.coefficient * profile(self.body, self.root * xi)
@@ -63,14 +69,11 @@ impl OneTerm {
         libm::log(amplitude / remaining) / (self.root * self.root)
     }
 
-    /// How far the time found is off for want of the second term, roughly, as a part of it: the second root
-    /// lies pi beyond the first.
-    pub fn doubt(&self, fourier: f64) -> f64 {
+    /// How far the time found is off for want of the `second` term, as a part of it, at a place.
+    pub fn doubt(&self, second: &Self, xi: f64, fourier: f64) -> f64 {
+        let left = |term: &Self| term.remaining(term.at(xi), fourier).abs();
         let decay = self.root * self.root * fourier;
-        if decay <= 0.0 {
-            return 1.0;
-        }
-        libm::exp(-(2.0 * self.root + PI) * PI * fourier) / decay
+        if decay <= 0.0 { 1.0 } else { left(second) / left(self) / decay }
     }
 }
 
@@ -83,14 +86,34 @@ fn first_root(body: Body, biot: f64) -> f64 {
             Body::Sphere => (3.0 * biot * (1.0 - biot / 5.0)).sqrt(),
         };
     }
-    // Divided by 1 + Bi, so that a held face is no special case.
+    match body {
+        Body::Slab => bisect(0.0, FRAC_PI_2, |z| balance(body, biot, z)),
+        // The first zero of J0 lies at 2.4048.
+        Body::Cylinder => bisect(0.0, 2.5, |z| balance(body, biot, z)),
+        Body::Sphere => bisect(0.0, PI, |z| balance(body, biot, z)),
+    }
+}
+
+/// Second root of the same equations: between those for no film and for a held face.
+fn second_root(body: Body, biot: f64) -> f64 {
+    let (low, high) = match body {
+        Body::Slab => (PI, 1.5 * PI),
+        // Second zero of J1 and of J0. Source: Abramowitz and Stegun 1964, table 9.5.
+        Body::Cylinder => (3.831_705_970_2, 5.520_078_110_3),
+        // Second root of tan z = z. Source: Carslaw and Jaeger 1959, appendix IV.
+        Body::Sphere => (4.493_409_457_9, 2.0 * PI),
+    };
+    bisect(low, high, |z| -balance(body, biot, z))
+}
+
+/// The equation for the roots, divided by 1 + Bi, so that a held face is no special case.
+fn balance(body: Body, biot: f64, z: f64) -> f64 {
     let inside = 1.0 / (1.0 + biot);
     let outside = 1.0 - inside;
     match body {
-        Body::Slab => bisect(0.0, FRAC_PI_2, |z| inside * z * libm::sin(z) - outside * libm::cos(z)),
-        // The first zero of J0 lies at 2.4048.
-        Body::Cylinder => bisect(0.0, 2.5, |z| inside * z * libm::j1(z) - outside * libm::j0(z)),
-        Body::Sphere => bisect(0.0, PI, |z| inside * sine_less(z) - outside * libm::sin(z)),
+        Body::Slab => inside * z * libm::sin(z) - outside * libm::cos(z),
+        Body::Cylinder => inside * z * libm::j1(z) - outside * libm::j0(z),
+        Body::Sphere => inside * sine_less(z) - outside * libm::sin(z),
     }
 }
 

@@ -100,19 +100,19 @@ mod tests {
     #[test]
     fn a_foundation_whose_face_is_held_cold() {
         let found = time(60.0, Step::Held(5.0), 0.1, 40.0);
-        assert_relative_eq!(found, 8758.765_42, max_relative = 1e-8);
+        assert_relative_eq!(found, 8_758.765_42, max_relative = 1e-8);
     }
 
     #[test]
     fn a_foundation_under_warm_air() {
         let found = time(5.0, Step::Film(15.0, 60.0), 0.05, 20.0);
-        assert_relative_eq!(found, 7555.721_45, max_relative = 1e-8);
+        assert_relative_eq!(found, 7_555.721_45, max_relative = 1e-8);
     }
 
     #[test]
     fn concrete_under_a_radiant_panel() {
-        assert_relative_eq!(time(18.0, Step::Flux(900.0), 0.03, 40.0), 4015.620_56, max_relative = 1e-8);
-        assert_relative_eq!(time(18.0, Step::Flux(900.0), 0.0, 60.0), 4846.653_67, max_relative = 1e-8);
+        assert_relative_eq!(time(18.0, Step::Flux(900.0), 0.03, 40.0), 4_015.620_56, max_relative = 1e-8);
+        assert_relative_eq!(time(18.0, Step::Flux(900.0), 0.0, 60.0), 4_846.653_67, max_relative = 1e-8);
     }
 
     #[test]
