@@ -266,8 +266,7 @@ impl Table {
             if inside { "" } else { "OUT" },
             case.source,
         );
-        // A NaN is no answer either.
-        if !inside || !(error <= 1.0) {
+        if !inside || error.is_nan() || error > 1.0 {
             self.failures.push(row.clone());
         }
         self.rows.push(row);

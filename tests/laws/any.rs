@@ -29,7 +29,7 @@ const PERIODS: f64 = 12.0;
 
 /// What is kept while a scenario is drawn.
 struct Draw<'a> {
-    dice: &'a mut Dice,
+    dice: &'a mut Dice<'a>,
     extent: (f64, f64),
     constant: bool,
     heated: bool,
@@ -71,7 +71,7 @@ pub fn any(rolls: &[f64]) -> Any {
     let thickness: f64 = layers.iter().filter_map(|layer| layer["thickness_m"].as_f64()).sum();
     let start = draw.start(count, thickness, has_inner_face);
     let ready_when: Vec<Value> =
-        (0..1 + draw.dice.below(3)).map(|_| draw.condition(count, has_inner_face)).collect();
+        (0..=draw.dice.below(2)).map(|_| draw.condition(count, has_inner_face)).collect();
     let must_not: Vec<Value> =
         (0..draw.dice.below(3)).map(|_| draw.condition(count, has_inner_face)).collect();
 
@@ -177,7 +177,7 @@ impl Draw<'_> {
     /// Rows of surroundings of face 1 (inner) or 2 (outer).
     fn programme(&mut self, mixed: bool, flux_at: u32, face: u32) -> Value {
         let mut from = 0.0;
-        let rows: Vec<Value> = (0..1 + self.dice.below(3))
+        let rows: Vec<Value> = (0..=self.dice.below(2))
             .map(|i| {
                 let mut row = if flux_at == 0 {
                     self.face(mixed)

@@ -7,21 +7,21 @@ use proptest::strategy::Strategy;
 const ROLLS: usize = 250;
 
 /// Numbers from 0 to 1 that decide everything; a roll of 0 is the plainest choice.
-pub struct Dice(std::vec::IntoIter<f64>);
+pub struct Dice<'a>(std::slice::Iter<'a, f64>);
 
 /// Dice for one scenario.
 pub fn dice() -> impl Strategy<Value = Vec<f64>> {
     vec(0.0..1.0, ROLLS)
 }
 
-impl Dice {
+impl<'a> Dice<'a> {
     /// Dice that fall as given, and on 0 after that.
-    pub fn new(rolls: &[f64]) -> Self {
-        Self(rolls.to_vec().into_iter())
+    pub fn new(rolls: &'a [f64]) -> Self {
+        Self(rolls.iter())
     }
 
     fn roll(&mut self) -> f64 {
-        self.0.next().unwrap_or(0.0)
+        self.0.next().copied().unwrap_or(0.0)
     }
 
     /// Does something happen that happens in this share of cases?

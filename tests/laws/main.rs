@@ -175,7 +175,7 @@ fn a_slab_turned_inside_out_answers_the_same() {
         if let Some(item) = slab["item"].as_object_mut() {
             item.remove("inner_radius_m");
         }
-        let plain = Plain { file: slab, ..plain };
+        let plain = Plain { file: slab };
         let turned = plain.turned();
         meet(&plain, &turned, 1.0)
     });
