@@ -53,11 +53,23 @@ interface Report {
   ready_when: ConditionReport[];
   standing: Outcome | null;
   must_not: ConditionReport[];
-  heat_balance: { per: string; until_s: number; stored_j: number; in_inner_j: number; in_outer_j: number; relative_error: number };
+  heat_balance: {
+    per: string;
+    until_s: number;
+    stored_j: number;
+    in_inner_j: number;
+    in_outer_j: number;
+    relative_error: number;
+  };
   by_hand: HandFormula[];
   course: { start: State; end: State; end_s: number; settles: boolean };
   checks: [string, string][];
-  effort: { nodes: number[]; tolerance_k: number[]; steps: number; rejected: number };
+  effort: {
+    nodes: number[];
+    tolerance_k: number[];
+    steps: number;
+    rejected: number;
+  };
   warnings: Problem[];
   cautions: string[];
 }
@@ -113,7 +125,16 @@ interface PictureTable {
 /** The class that wasm-bindgen makes of the core's page. */
 interface CorePage {
   solve(text: string): Solution;
-  draw(picture: string, context: CanvasRenderingContext2D, width: number, height: number, ratio: number, time: number, dark: boolean, us: boolean): void;
+  draw(
+    picture: string,
+    context: CanvasRenderingContext2D,
+    width: number,
+    height: number,
+    ratio: number,
+    time: number,
+    dark: boolean,
+    us: boolean,
+  ): void;
   table(picture: string, time: number, us: boolean): PictureTable;
   moment_words(time: number): string;
 }
@@ -122,10 +143,28 @@ interface CoreFunctions {
   initSync(options: { module: WebAssembly.Module }): void;
   Page: { new (): CorePage };
   read_quantity(text: string, kind: string, us: boolean): Understood;
-  write_quantity(value: number, low: number | undefined, high: number | undefined, kind: string, us: boolean): string;
-  step_quantity(text: string, kind: string, us: boolean, up: boolean, large: boolean): string | undefined;
+  write_quantity(
+    value: number,
+    low: number | undefined,
+    high: number | undefined,
+    kind: string,
+    us: boolean,
+  ): string;
+  step_quantity(
+    text: string,
+    kind: string,
+    us: boolean,
+    up: boolean,
+    large: boolean,
+  ): string | undefined;
   read_pairs(text: string, at: string, value: string, us: boolean): Pairs;
-  write_pairs(at: Float64Array, values: Float64Array, at_kind: string, value_kind: string, us: boolean): string;
+  write_pairs(
+    at: Float64Array,
+    values: Float64Array,
+    at_kind: string,
+    value_kind: string,
+    us: boolean,
+  ): string;
   materials(): Material[];
   choices(of: string): Choice[];
   examples(): Example[];

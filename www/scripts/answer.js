@@ -23,22 +23,42 @@ const answer = {
     const solution = core.page.solve(text);
     const drafts = model.drafts.size;
     const errors = solution.problems.filter((one) => one.severity === "error");
-    const homeless = fields.place(solution.problems.concat(solution.report?.warnings ?? []));
-    answer.showProblems(errors, homeless.filter((one) => one.severity === "error"), drafts);
+    const homeless = fields.place(
+      solution.problems.concat(solution.report?.warnings ?? []),
+    );
+    answer.showProblems(
+      errors,
+      homeless.filter((one) => one.severity === "error"),
+      drafts,
+    );
     if (solution.report && drafts === 0) answer.show(solution.report);
     answer.mark(errors.length + drafts > 0);
   },
 
   /** @param {boolean} stale */
   mark(stale) {
-    document.getElementById("answer")?.classList.toggle("stale", stale && answer.report !== null);
+    document
+      .getElementById("answer")
+      ?.classList.toggle("stale", stale && answer.report !== null);
     if (stale && answer.report === null) {
       answer.text("answer-headline", "No answer yet");
-      answer.text("answer-detail", "Describe the item, how it starts and what is around it.");
+      answer.text(
+        "answer-detail",
+        "Describe the item, how it starts and what is around it.",
+      );
     }
-    const foot = answer.report && !stale ? answer.report.headline : stale ? "An entry needs a look" : "";
+    const foot =
+      answer.report && !stale
+        ? answer.report.headline
+        : stale
+          ? "An entry needs a look"
+          : "";
     answer.text("foot-line", foot);
-    answer.say(stale ? "An entry needs a look." : `${answer.report?.headline ?? ""}. ${answer.report?.detail ?? ""}`);
+    answer.say(
+      stale
+        ? "An entry needs a look."
+        : `${answer.report?.headline ?? ""}. ${answer.report?.detail ?? ""}`,
+    );
     performance.mark("stillheat-answer");
   },
 
@@ -51,8 +71,12 @@ const answer = {
   /** @param {Report} report */
   show(report) {
     answer.report = report;
-    const line = /** @type {HTMLElement} */ (document.getElementById("answer-headline"));
-    const clock = report.ready?.clock ?? (report.ready ? undefined : report.standing?.clock);
+    const line = /** @type {HTMLElement} */ (
+      document.getElementById("answer-headline")
+    );
+    const clock =
+      report.ready?.clock ??
+      (report.ready ? undefined : report.standing?.clock);
     if (clock) {
       const time = document.createElement("time");
       time.dateTime = clock;
@@ -61,14 +85,20 @@ const answer = {
     } else line.textContent = report.headline;
     answer.text("answer-detail", report.detail);
     document.title = `${report.headline} – Stillheat`;
-    const list = /** @type {HTMLElement} */ (document.getElementById("answer-conditions"));
+    const list = /** @type {HTMLElement} */ (
+      document.getElementById("answer-conditions")
+    );
     const all = report.ready_when.concat(report.must_not);
     list.replaceChildren(...all.map((one) => answer.outcome(one)));
     answer.checks(report);
     answer.byHand(report);
     answer.warnings(report);
-    const cautions = /** @type {HTMLElement} */ (document.getElementById("cautions"));
-    cautions.replaceChildren(...report.cautions.map((words) => answer.paragraph(words)));
+    const cautions = /** @type {HTMLElement} */ (
+      document.getElementById("cautions")
+    );
+    cautions.replaceChildren(
+      ...report.cautions.map((words) => answer.paragraph(words)),
+    );
     pictures.show(report);
   },
 
@@ -113,22 +143,31 @@ const answer = {
 
   /** @param {Report} report */
   byHand(report) {
-    const place = /** @type {HTMLElement} */ (document.getElementById("by-hand"));
+    const place = /** @type {HTMLElement} */ (
+      document.getElementById("by-hand")
+    );
     place.replaceChildren();
     if (report.by_hand.length === 0) return;
     const heading = document.createElement("h3");
     heading.textContent = "By hand";
     const table = pictures.table({
-      caption: "What a pocket calculator gives, and whether its formula holds here",
+      caption:
+        "What a pocket calculator gives, and whether its formula holds here",
       columns: ["Formula", "gives", "does it hold?"],
-      rows: report.by_hand.map((one) => [`${one.name}: ${one.formula}`, one.gives, `${one.holds ? "holds" : "does not hold"}: ${one.validity}`]),
+      rows: report.by_hand.map((one) => [
+        `${one.name}: ${one.formula}`,
+        one.gives,
+        `${one.holds ? "holds" : "does not hold"}: ${one.validity}`,
+      ]),
     });
     place.append(heading, table);
   },
 
   /** @param {Report} report */
   warnings(report) {
-    const card = /** @type {HTMLElement} */ (document.getElementById("warnings"));
+    const card = /** @type {HTMLElement} */ (
+      document.getElementById("warnings")
+    );
     card.hidden = report.warnings.length === 0;
     fields.in(card, "ul").replaceChildren(
       ...report.warnings.map((one) => {
@@ -141,28 +180,38 @@ const answer = {
 
   /** @param {Problem[]} errors @param {Problem[]} homeless @param {number} drafts */
   showProblems(errors, homeless, drafts) {
-    const place = /** @type {HTMLElement} */ (document.getElementById("answer-problems"));
+    const place = /** @type {HTMLElement} */ (
+      document.getElementById("answer-problems")
+    );
     const count = errors.length + drafts;
     place.hidden = count === 0;
     place.replaceChildren();
     if (count === 0) return;
     const last = answer.report ? "The last answer; " : "";
-    place.append(answer.paragraph(`${last}${count === 1 ? "one entry needs" : `${count} entries need`} a look:`));
+    place.append(
+      answer.paragraph(
+        `${last}${count === 1 ? "one entry needs" : `${count} entries need`} a look:`,
+      ),
+    );
     const list = document.createElement("ul");
     const paths = [...model.drafts.keys(), ...errors.map((one) => one.path)];
     for (const path of [...new Set(paths)].slice(0, 12)) {
       const found = fields.nearest(path);
       const own = errors.find((one) => one.path === path);
       const item = document.createElement("li");
-      const words = model.drafts.has(path) ? `${answer.nameOf(found)}: not understood` : `${answer.nameOf(found)}: ${own?.message ?? ""}`;
+      const words = model.drafts.has(path)
+        ? `${answer.nameOf(found)}: not understood`
+        : `${answer.nameOf(found)}: ${own?.message ?? ""}`;
       if (found) {
         const link = document.createElement("button");
         link.type = "button";
         link.textContent = words;
         link.addEventListener("click", () => found.focus());
         item.append(link);
-      } else item.textContent = `${path === "" ? "The file" : path}: ${own?.message ?? ""}`;
-      if (own && homeless.includes(own) && own.hint !== "") item.append(` ${own.hint}`);
+      } else
+        item.textContent = `${path === "" ? "The file" : path}: ${own?.message ?? ""}`;
+      if (own && homeless.includes(own) && own.hint !== "")
+        item.append(` ${own.hint}`);
       list.append(item);
     }
     place.append(list);
@@ -170,13 +219,17 @@ const answer = {
 
   /** @param {HTMLElement | null} control */
   nameOf(control) {
-    const label = control && document.querySelector(`label[for="${control.id}"]`);
+    const label =
+      control && document.querySelector(`label[for="${control.id}"]`);
     return label?.textContent ?? control?.getAttribute("aria-label") ?? "Here";
   },
 
   /** Says the answer once typing has paused. @param {string} words */
   say(words) {
     window.clearTimeout(answer.saying);
-    answer.saying = window.setTimeout(() => answer.text("announce", words), 700);
+    answer.saying = window.setTimeout(
+      () => answer.text("announce", words),
+      700,
+    );
   },
 };

@@ -10,7 +10,9 @@ const core = {
   materials: [],
 
   start() {
-    const element = /** @type {HTMLElement} */ (document.getElementById("core"));
+    const element = /** @type {HTMLElement} */ (
+      document.getElementById("core")
+    );
     const text = atob(element.textContent || "");
     const bytes = new Uint8Array(text.length);
     for (let i = 0; i < text.length; i += 1) bytes[i] = text.charCodeAt(i);
@@ -35,10 +37,27 @@ const core = {
    */
   write(value, kind) {
     if (typeof value === "number") {
-      return wasm_bindgen.write_quantity(value, undefined, undefined, kind, core.us);
+      return wasm_bindgen.write_quantity(
+        value,
+        undefined,
+        undefined,
+        kind,
+        core.us,
+      );
     }
     const spread = /** @type {any} */ (value);
-    if (spread === null || typeof spread !== "object" || typeof spread.value !== "number") return "";
-    return wasm_bindgen.write_quantity(spread.value, spread.low, spread.high, kind, core.us);
+    if (
+      spread === null ||
+      typeof spread !== "object" ||
+      typeof spread.value !== "number"
+    )
+      return "";
+    return wasm_bindgen.write_quantity(
+      spread.value,
+      spread.low,
+      spread.high,
+      kind,
+      core.us,
+    );
   },
 };

@@ -13,10 +13,14 @@ const fields = {
    * @returns {HTMLElement}
    */
   clone(id) {
-    const template = /** @type {HTMLTemplateElement} */ (document.getElementById(id));
+    const template = /** @type {HTMLTemplateElement} */ (
+      document.getElementById(id)
+    );
     const holder = document.createElement("div");
     holder.append(template.content.cloneNode(true));
-    return holder.childElementCount === 1 ? /** @type {HTMLElement} */ (holder.firstElementChild) : holder;
+    return holder.childElementCount === 1
+      ? /** @type {HTMLElement} */ (holder.firstElementChild)
+      : holder;
   },
 
   /** @param {ParentNode} root @param {string} selector @returns {any} */
@@ -31,7 +35,9 @@ const fields = {
    */
   label(root, path) {
     for (const label of root.querySelectorAll("label:not([for])")) {
-      const control = /** @type {HTMLElement | null} */ (label.nextElementSibling);
+      const control = /** @type {HTMLElement | null} */ (
+        label.nextElementSibling
+      );
       if (!control || !["SELECT", "INPUT"].includes(control.tagName)) continue;
       control.id = fields.id(`${path}/${control.className}`);
       /** @type {HTMLLabelElement} */ (label).htmlFor = control.id;
@@ -53,21 +59,34 @@ const fields = {
   /** @param {HTMLElement} element @param {string} base */
   mountOne(element, base) {
     const key = element.dataset["field"] ?? "";
-    const path = key.startsWith("/") ? key : key === "" ? base : `${base}/${key}`;
+    const path = key.startsWith("/")
+      ? key
+      : key === ""
+        ? base
+        : `${base}/${key}`;
     element.dataset["path"] = path;
     const input = document.createElement("input");
-    input.id = fields.id(path) + (element.dataset["table"] === undefined ? "" : "-table");
+    input.id =
+      fields.id(path) +
+      (element.dataset["table"] === undefined ? "" : "-table");
     input.dataset["path"] = path;
     input.type = "text";
     input.spellcheck = false;
-    input.setAttribute("aria-describedby", `${input.id}-understood ${input.id}-problem`);
+    input.setAttribute(
+      "aria-describedby",
+      `${input.id}-understood ${input.id}-problem`,
+    );
     if (element.dataset["text"] !== undefined) {
       input.classList.add("words");
       input.maxLength = Number(element.dataset["text"]);
     }
-    if (element.dataset["optional"] !== undefined) input.placeholder = element.dataset["optional"];
-    /** @type {HTMLLabelElement} */ (element.querySelector("label")).htmlFor = input.id;
-    element.append(element.dataset["choices"] ? fields.withChoices(element, input) : input);
+    if (element.dataset["optional"] !== undefined)
+      input.placeholder = element.dataset["optional"];
+    /** @type {HTMLLabelElement} */ (element.querySelector("label")).htmlFor =
+      input.id;
+    element.append(
+      element.dataset["choices"] ? fields.withChoices(element, input) : input,
+    );
     for (const name of ["understood", "problem", "source"]) {
       const line = document.createElement("p");
       line.className = name;
@@ -76,9 +95,14 @@ const fields = {
     }
     input.value = model.drafts.get(path) ?? fields.written(element, path);
     input.addEventListener("input", () => fields.typed(element, input));
-    input.addEventListener("focus", () => (input.dataset["before"] = input.value));
+    input.addEventListener(
+      "focus",
+      () => (input.dataset["before"] = input.value),
+    );
     input.addEventListener("blur", () => (model.typing = ""));
-    input.addEventListener("keydown", (event) => fields.stepped(event, element, input));
+    input.addEventListener("keydown", (event) =>
+      fields.stepped(event, element, input),
+    );
     fields.understand(element, input);
   },
 
@@ -89,24 +113,41 @@ const fields = {
     const select = document.createElement("select");
     holder.className = "entry";
     chooser.className = "chooser";
-    const label = /** @type {HTMLElement} */ (element.querySelector("label")).textContent;
+    const label = /** @type {HTMLElement} */ (element.querySelector("label"))
+      .textContent;
     select.setAttribute("aria-label", `${label}: choose in words`);
     select.title = "Choose in words";
     select.append(new Option("Choose in words", ""));
-    const choices = wasm_bindgen.choices(/** @type {string} */ (element.dataset["choices"]));
+    const choices = wasm_bindgen.choices(
+      /** @type {string} */ (element.dataset["choices"]),
+    );
     const kind = element.dataset["kind"] ?? "";
     choices.forEach((choice, i) => {
-      const spread = { value: choice.likely, low: choice.low, high: choice.high };
-      select.append(new Option(`${choice.words}: ${core.write(spread, kind)}`, String(i)));
+      const spread = {
+        value: choice.likely,
+        low: choice.low,
+        high: choice.high,
+      };
+      select.append(
+        new Option(`${choice.words}: ${core.write(spread, kind)}`, String(i)),
+      );
     });
     select.addEventListener("change", () => {
       const choice = choices[Number(select.value)];
       if (select.value === "" || !choice) return;
       select.value = "";
-      const spread = { value: choice.likely, low: choice.low, high: choice.high };
-      input.value = core.write(choice.low === choice.high ? choice.likely : spread, kind);
+      const spread = {
+        value: choice.likely,
+        low: choice.low,
+        high: choice.high,
+      };
+      input.value = core.write(
+        choice.low === choice.high ? choice.likely : spread,
+        kind,
+      );
       fields.typed(element, input);
-      fields.in(element, ".source").textContent = `${choice.words}: ${choice.source}`;
+      fields.in(element, ".source").textContent =
+        `${choice.words}: ${choice.source}`;
       input.focus();
     });
     chooser.append(select);
@@ -126,12 +167,20 @@ const fields = {
     if (value === undefined || value === null) return "";
     if (element.dataset["text"] !== undefined) return String(value);
     if (element.dataset["table"] !== undefined) {
-      return fields.writtenPairs(value.at_s, value[element.dataset["table"] ?? ""], "duration", kind);
+      return fields.writtenPairs(
+        value.at_s,
+        value[element.dataset["table"] ?? ""],
+        "duration",
+        kind,
+      );
     }
     if (element.dataset["property"] !== undefined && value.at_c !== undefined) {
       return fields.writtenPairs(value.at_c, value.values, "temperature", kind);
     }
-    if (element.dataset["property"] !== undefined && value.polynomial_in_c !== undefined) {
+    if (
+      element.dataset["property"] !== undefined &&
+      value.polynomial_in_c !== undefined
+    ) {
       return "a polynomial, see the file";
     }
     return core.write(value, kind);
@@ -140,7 +189,13 @@ const fields = {
   /** @param {number[]} at @param {number[]} values @param {string} atKind @param {string} kind */
   writtenPairs(at, values, atKind, kind) {
     if (!Array.isArray(at) || !Array.isArray(values)) return "";
-    return wasm_bindgen.write_pairs(new Float64Array(at), new Float64Array(values), atKind, kind, core.us);
+    return wasm_bindgen.write_pairs(
+      new Float64Array(at),
+      new Float64Array(values),
+      atKind,
+      kind,
+      core.us,
+    );
   },
 
   /**
@@ -158,8 +213,12 @@ const fields = {
       const pairs = wasm_bindgen.read_pairs(text, "duration", kind, core.us);
       if (pairs.problem !== undefined) return { problem: pairs.problem };
       const before = model.get(path);
-      const table = /** @type {{ [key: string]: Json }} */ ({ at_s: pairs.at ?? [], [element.dataset["table"] ?? ""]: pairs.values ?? [] });
-      if (before?.repeats_every_s !== undefined) table["repeats_every_s"] = before.repeats_every_s;
+      const table = /** @type {{ [key: string]: Json }} */ ({
+        at_s: pairs.at ?? [],
+        [element.dataset["table"] ?? ""]: pairs.values ?? [],
+      });
+      if (before?.repeats_every_s !== undefined)
+        table["repeats_every_s"] = before.repeats_every_s;
       return { value: table };
     }
     if (element.dataset["property"] !== undefined && text.includes(":")) {
@@ -211,8 +270,10 @@ const fields = {
     const same = (/** @type {string} */ text) => text.replaceAll(/\s/g, "");
     const typed = same(input.value);
     // The bare number of a shown unit is understood as it stands.
-    const bare = typed !== "" && same(written).startsWith(typed) && /[0-9]$/.test(typed);
-    if (typed !== "" && typed !== same(written) && !bare) line.textContent = `understood as ${written}`;
+    const bare =
+      typed !== "" && same(written).startsWith(typed) && /[0-9]$/.test(typed);
+    if (typed !== "" && typed !== same(written) && !bare)
+      line.textContent = `understood as ${written}`;
   },
 
   /** @param {KeyboardEvent} event @param {HTMLElement} element @param {HTMLInputElement} input */
@@ -220,7 +281,13 @@ const fields = {
     if (event.key !== "ArrowUp" && event.key !== "ArrowDown") return;
     const kind = element.dataset["kind"];
     if (kind === undefined) return;
-    const next = wasm_bindgen.step_quantity(input.value, kind, core.us, event.key === "ArrowUp", event.shiftKey);
+    const next = wasm_bindgen.step_quantity(
+      input.value,
+      kind,
+      core.us,
+      event.key === "ArrowUp",
+      event.shiftKey,
+    );
     if (next === undefined) return;
     event.preventDefault();
     input.value = next;
@@ -241,13 +308,19 @@ const fields = {
    * @returns {Problem[]}
    */
   place(problems) {
-    const inputs = /** @type {HTMLInputElement[]} */ ([...document.querySelectorAll("input[data-path]")]);
+    const inputs = /** @type {HTMLInputElement[]} */ ([
+      ...document.querySelectorAll("input[data-path]"),
+    ]);
     const left = new Set(problems);
     for (const input of inputs) {
       const path = input.dataset["path"];
       if (path !== undefined && model.drafts.has(path)) continue;
-      const own = problems.filter((one) => one.path === path || one.path.startsWith(`${path}/`));
-      const words = own.map((one) => [one.message, one.hint].filter((part) => part !== "").join(". "));
+      const own = problems.filter(
+        (one) => one.path === path || one.path.startsWith(`${path}/`),
+      );
+      const words = own.map((one) =>
+        [one.message, one.hint].filter((part) => part !== "").join(". "),
+      );
       if (input.closest(".field")) fields.complain(input, words.join("; "));
       if (input.closest("[hidden]")) continue;
       for (const one of own) left.delete(one);
@@ -259,7 +332,10 @@ const fields = {
   nearest(path) {
     for (let at = path; at !== ""; at = at.slice(0, at.lastIndexOf("/"))) {
       const found = document.querySelector(`[data-path^="${CSS.escape(at)}"]`);
-      if (found) return found.matches("input, select, button") ? /** @type {HTMLElement} */ (found) : fields.in(found, "input, select, button");
+      if (found)
+        return found.matches("input, select, button")
+          ? /** @type {HTMLElement} */ (found)
+          : fields.in(found, "input, select, button");
     }
     return null;
   },

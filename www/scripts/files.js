@@ -11,7 +11,14 @@ const files = {
       stillheat: 1,
       item: { shape: "cylinder", layers: [{ material: "water" }] },
       start: { uniform_c: 80 },
-      surroundings: { outer: [{ temperature_c: 20, film_w_per_m2_k: { value: 7, low: 5, high: 10 } }] },
+      surroundings: {
+        outer: [
+          {
+            temperature_c: 20,
+            film_w_per_m2_k: { value: 7, low: 5, high: 10 },
+          },
+        ],
+      },
       ready_when: [],
     };
   },
@@ -25,14 +32,24 @@ const files = {
       scenario = null;
     }
     const item = scenario?.item;
-    const shaped = scenario !== null && typeof scenario === "object" && scenario.stillheat !== undefined && Array.isArray(item?.layers);
+    const shaped =
+      scenario !== null &&
+      typeof scenario === "object" &&
+      scenario.stillheat !== undefined &&
+      Array.isArray(item?.layers);
     if (!shaped) {
       const problem = core.page.solve(text).problems[0];
-      const words = problem ? `${problem.path} ${problem.message}. ${problem.hint}` : "this is no scenario";
+      const words = problem
+        ? `${problem.path} ${problem.message}. ${problem.hint}`
+        : "this is no scenario";
       answer.text("announce", `${name} was not opened: ${words}`);
-      const place = /** @type {HTMLElement} */ (document.getElementById("answer-problems"));
+      const place = /** @type {HTMLElement} */ (
+        document.getElementById("answer-problems")
+      );
       place.hidden = false;
-      place.replaceChildren(answer.paragraph(`${name} was not opened: ${words}`));
+      place.replaceChildren(
+        answer.paragraph(`${name} was not opened: ${words}`),
+      );
       return;
     }
     model.replace(scenario);
@@ -50,9 +67,15 @@ const files = {
   save() {
     const text = `${JSON.stringify(model.scenario, null, 2)}\n`;
     const title = String(model.get("/title") ?? "");
-    const name = title.toLowerCase().replaceAll(/[^a-z0-9]+/g, "-").replaceAll(/^-+|-+$/g, "") || "stillheat";
+    const name =
+      title
+        .toLowerCase()
+        .replaceAll(/[^a-z0-9]+/g, "-")
+        .replaceAll(/^-+|-+$/g, "") || "stillheat";
     const link = document.createElement("a");
-    link.href = URL.createObjectURL(new Blob([text], { type: "application/json" }));
+    link.href = URL.createObjectURL(
+      new Blob([text], { type: "application/json" }),
+    );
     link.download = `${name}.json`;
     link.click();
     URL.revokeObjectURL(link.href);
@@ -61,7 +84,11 @@ const files = {
   /** Remembers the state, where the browser allows it. */
   keep() {
     try {
-      const kept = { scenario: model.scenario, drafts: Object.fromEntries(model.drafts), us: core.us };
+      const kept = {
+        scenario: model.scenario,
+        drafts: Object.fromEntries(model.drafts),
+        us: core.us,
+      };
       localStorage.setItem("stillheat", JSON.stringify(kept));
     } catch {
       // Not allowed here: the page works without.
@@ -79,15 +106,23 @@ const files = {
   },
 
   listen() {
-    const input = /** @type {HTMLInputElement} */ (document.getElementById("file"));
-    document.getElementById("open")?.addEventListener("click", () => input.click());
+    const input = /** @type {HTMLInputElement} */ (
+      document.getElementById("file")
+    );
+    document
+      .getElementById("open")
+      ?.addEventListener("click", () => input.click());
     input.addEventListener("change", () => {
       const file = input.files?.[0];
       input.value = "";
       if (file) void files.read(file);
     });
-    document.getElementById("save")?.addEventListener("click", () => files.save());
-    document.getElementById("print")?.addEventListener("click", () => window.print());
+    document
+      .getElementById("save")
+      ?.addEventListener("click", () => files.save());
+    document
+      .getElementById("print")
+      ?.addEventListener("click", () => window.print());
     document.getElementById("new")?.addEventListener("click", () => {
       model.replace(files.empty());
       document.getElementById("shape")?.focus();
@@ -97,9 +132,12 @@ const files = {
   },
 
   listExamples() {
-    const select = /** @type {HTMLSelectElement} */ (document.getElementById("examples"));
+    const select = /** @type {HTMLSelectElement} */ (
+      document.getElementById("examples")
+    );
     files.examples = wasm_bindgen.examples();
-    for (const example of files.examples) select.append(new Option(example.title, example.id));
+    for (const example of files.examples)
+      select.append(new Option(example.title, example.id));
     select.addEventListener("change", () => {
       const example = files.examples.find((one) => one.id === select.value);
       select.value = "";

@@ -5,7 +5,9 @@ const layers = {
   colours: ["#8fb4c6", "#8b9299", "#d3bf8b", "#b58b72", "#a5b693", "#b9a0bd"],
 
   render() {
-    const shape = /** @type {HTMLSelectElement} */ (document.getElementById("shape"));
+    const shape = /** @type {HTMLSelectElement} */ (
+      document.getElementById("shape")
+    );
     shape.value = model.get("/item/shape") ?? "slab";
     layers.renderHollow();
     const hints = {
@@ -13,15 +15,24 @@ const layers = {
       cylinder: "From the axis out; the first layer's thickness is its radius.",
       sphere: "From the centre out; the first layer's thickness is its radius.",
     };
-    const hint = /** @type {HTMLElement} */ (document.getElementById("layers-hint"));
-    hint.textContent = model.hasInnerFace() && shape.value !== "slab" ? "From the hollow out." : hints[/** @type {"slab"} */ (shape.value)];
+    const hint = /** @type {HTMLElement} */ (
+      document.getElementById("layers-hint")
+    );
+    hint.textContent =
+      model.hasInnerFace() && shape.value !== "slab"
+        ? "From the hollow out."
+        : hints[/** @type {"slab"} */ (shape.value)];
     const list = /** @type {HTMLElement} */ (document.getElementById("layers"));
     const all = model.get("/item/layers") ?? [];
-    list.replaceChildren(.../** @type {any[]} */ (all).map((_, i) => layers.one(i, all.length)));
+    list.replaceChildren(
+      .../** @type {any[]} */ (all).map((_, i) => layers.one(i, all.length)),
+    );
   },
 
   renderHollow() {
-    const place = /** @type {HTMLElement} */ (document.getElementById("hollow"));
+    const place = /** @type {HTMLElement} */ (
+      document.getElementById("hollow")
+    );
     place.replaceChildren();
     if (model.get("/item/shape") === "slab") return;
     const button = document.createElement("button");
@@ -31,7 +42,9 @@ const layers = {
       button.id = "make-hollow";
       button.textContent = "It is hollow…";
       button.addEventListener("click", () => {
-        model.change(() => model.set("/item/inner_radius_m", 0.1), { structure: true });
+        model.change(() => model.set("/item/inner_radius_m", 0.1), {
+          structure: true,
+        });
         document.getElementById(fields.id("/item/inner_radius_m"))?.focus();
       });
       place.append(button);
@@ -68,24 +81,37 @@ const layers = {
     const element = fields.clone("layer-template");
     element.dataset["path"] = path;
     element.setAttribute("aria-label", `Layer ${i + 1}: ${model.layerName(i)}`);
-    fields.in(element, ".swatch").style.background = layers.colours[i % layers.colours.length];
+    fields.in(element, ".swatch").style.background =
+      layers.colours[i % layers.colours.length];
     layers.materialSelect(fields.in(element, ".material"), path);
     layers.moves(element, i, count);
     layers.motion(element, path, layer);
     const material = core.materials.find((one) => one.id === layer.material);
-    const own = ["density_kg_per_m3", "heat_capacity_j_per_kg_k", "conductivity_w_per_m_k"];
-    const some = own.some((key) => layer[key] !== undefined || model.drafts.has(`${path}/${key}`));
+    const own = [
+      "density_kg_per_m3",
+      "heat_capacity_j_per_kg_k",
+      "conductivity_w_per_m_k",
+    ];
+    const some = own.some(
+      (key) => layer[key] !== undefined || model.drafts.has(`${path}/${key}`),
+    );
     fields.in(element, ".own").hidden = material !== undefined && !some;
     fields.in(element, ".own-again").hidden = material === undefined || some;
-    if (material) for (const field of element.querySelectorAll(".own .field")) /** @type {HTMLElement} */ (field).dataset["optional"] = "from the library";
+    if (material)
+      for (const field of element.querySelectorAll(".own .field"))
+        /** @type {HTMLElement} */ (field).dataset["optional"] =
+          "from the library";
     fields.in(element, ".make-own").addEventListener("click", () => {
       fields.in(element, ".own").hidden = false;
       fields.in(element, ".own-again").hidden = true;
       fields.in(element, ".own input").focus();
     });
-    fields.in(element, ".contact-field").hidden = i === 0 && layer.contact_m2_k_per_w === undefined;
-    fields.in(element, ".layer-more").open = layer.name !== undefined || layer.contact_m2_k_per_w !== undefined;
-    fields.in(element, '[data-field="name"]').dataset["optional"] = model.layerName(i);
+    fields.in(element, ".contact-field").hidden =
+      i === 0 && layer.contact_m2_k_per_w === undefined;
+    fields.in(element, ".layer-more").open =
+      layer.name !== undefined || layer.contact_m2_k_per_w !== undefined;
+    fields.in(element, '[data-field="name"]').dataset["optional"] =
+      model.layerName(i);
     fields.label(element, path);
     fields.mount(element, path);
     return element;
@@ -107,21 +133,31 @@ const layers = {
       group.append(new Option(material.name, material.id));
     }
     const id = model.get(`${path}/material`) ?? "";
-    if (id !== "" && !core.materials.some((one) => one.id === id)) select.append(new Option(`${id} (not known)`, id));
+    if (id !== "" && !core.materials.some((one) => one.id === id))
+      select.append(new Option(`${id} (not known)`, id));
     select.value = id;
     select.dataset["path"] = `${path}/material`;
     select.addEventListener("change", () => {
       model.change(
         () =>
           model.renaming(() => {
-            model.set(`${path}/material`, select.value === "" ? undefined : select.value);
-            const liquid = core.materials.find((one) => one.id === select.value)?.liquid ?? false;
+            model.set(
+              `${path}/material`,
+              select.value === "" ? undefined : select.value,
+            );
+            const liquid =
+              core.materials.find((one) => one.id === select.value)?.liquid ??
+              false;
             if (select.value !== "" && !liquid) {
               model.set(`${path}/motion`, undefined);
               model.set(`${path}/inside_film_w_per_m2_k`, undefined);
             }
             if (select.value !== "") {
-              for (const key of ["density_kg_per_m3", "heat_capacity_j_per_kg_k", "conductivity_w_per_m_k"]) {
+              for (const key of [
+                "density_kg_per_m3",
+                "heat_capacity_j_per_kg_k",
+                "conductivity_w_per_m_k",
+              ]) {
                 model.set(`${path}/${key}`, undefined);
                 model.forget(`${path}/${key}`);
               }
@@ -137,8 +173,13 @@ const layers = {
     const select = fields.in(element, ".motion");
     const moves = layer.motion !== undefined && layer.motion !== "still";
     const material = core.materials.find((one) => one.id === layer.material);
-    fields.in(element, ".motion-row").hidden = !(moves || material === undefined || material.liquid);
-    fields.in(element, ".film-field").hidden = !moves && layer.inside_film_w_per_m2_k === undefined;
+    fields.in(element, ".motion-row").hidden = !(
+      moves ||
+      material === undefined ||
+      material.liquid
+    );
+    fields.in(element, ".film-field").hidden =
+      !moves && layer.inside_film_w_per_m2_k === undefined;
     select.value = layer.motion ?? "still";
     select.dataset["path"] = `${path}/motion`;
     select.addEventListener("change", () => {
@@ -149,9 +190,16 @@ const layers = {
           if (still) {
             model.set(`${path}/inside_film_w_per_m2_k`, undefined);
             model.forget(`${path}/inside_film_w_per_m2_k`);
-          } else if (model.get(`${path}/inside_film_w_per_m2_k`) === undefined) {
+          } else if (
+            model.get(`${path}/inside_film_w_per_m2_k`) === undefined
+          ) {
             const choice = wasm_bindgen.choices("inside_film")[0];
-            if (choice) model.set(`${path}/inside_film_w_per_m2_k`, { value: choice.likely, low: choice.low, high: choice.high });
+            if (choice)
+              model.set(`${path}/inside_film_w_per_m2_k`, {
+                value: choice.likely,
+                low: choice.low,
+                high: choice.high,
+              });
           }
         },
         { structure: true },
@@ -163,8 +211,18 @@ const layers = {
   moves(element, i, count) {
     const name = model.layerName(i);
     const buttons = /** @type {[string, string, boolean, () => void][]} */ ([
-      [".inwards", `Move ${name} inwards`, i === 0, () => layers.swap(i, i - 1, "inwards")],
-      [".outwards", `Move ${name} outwards`, i === count - 1, () => layers.swap(i, i + 1, "outwards")],
+      [
+        ".inwards",
+        `Move ${name} inwards`,
+        i === 0,
+        () => layers.swap(i, i - 1, "inwards"),
+      ],
+      [
+        ".outwards",
+        `Move ${name} outwards`,
+        i === count - 1,
+        () => layers.swap(i, i + 1, "outwards"),
+      ],
       [".remove", `Remove ${name}`, count === 1, () => layers.remove(i)],
     ]);
     for (const [selector, words, off, act] of buttons) {
@@ -183,14 +241,19 @@ const layers = {
         [all[from], all[to]] = [all[to], all[from]];
         delete all[0].contact_m2_k_per_w;
         const starts = model.get("/start/per_layer_c");
-        if (Array.isArray(starts) && starts.length === all.length) [starts[from], starts[to]] = [starts[to], starts[from]];
+        if (Array.isArray(starts) && starts.length === all.length)
+          [starts[from], starts[to]] = [starts[to], starts[from]];
         model.forget("/item/layers");
       },
       { structure: true },
     );
     const moved = document.querySelectorAll("#layers > .layer")[to];
     const same = moved && fields.in(moved, `.${button}`);
-    if (same) (same.disabled ? fields.in(moved, ".moves button:not(:disabled)") : same).focus();
+    if (same)
+      (same.disabled
+        ? fields.in(moved, ".moves button:not(:disabled)")
+        : same
+      ).focus();
   },
 
   /** @param {number} i */
@@ -201,23 +264,33 @@ const layers = {
         all.splice(i, 1);
         delete all[0].contact_m2_k_per_w;
         const starts = model.get("/start/per_layer_c");
-        if (Array.isArray(starts) && starts.length > all.length) starts.splice(i, 1);
+        if (Array.isArray(starts) && starts.length > all.length)
+          starts.splice(i, 1);
         model.forget("/item/layers");
       },
       { structure: true },
     );
     const left = document.querySelectorAll("#layers > .layer");
-    fields.in(left[Math.min(i, left.length - 1)] ?? document, ".material, #add-layer").focus();
+    fields
+      .in(
+        left[Math.min(i, left.length - 1)] ?? document,
+        ".material, #add-layer",
+      )
+      .focus();
   },
 
   add() {
     model.change(
       () => {
-        if (!Array.isArray(model.get("/item/layers"))) model.set("/item/layers", []);
+        if (!Array.isArray(model.get("/item/layers")))
+          model.set("/item/layers", []);
         const all = model.get("/item/layers");
-        all.push({ material: all.length === 0 ? "water" : "mineral-wool-pipe" });
+        all.push({
+          material: all.length === 0 ? "water" : "mineral-wool-pipe",
+        });
         const starts = model.get("/start/per_layer_c");
-        if (Array.isArray(starts) && starts.length > 0) starts.push(model.copy(starts[starts.length - 1]));
+        if (Array.isArray(starts) && starts.length > 0)
+          starts.push(model.copy(starts[starts.length - 1]));
       },
       { structure: true },
     );
@@ -225,15 +298,21 @@ const layers = {
   },
 
   listen() {
-    document.getElementById("add-layer")?.addEventListener("click", () => layers.add());
-    const shape = /** @type {HTMLSelectElement} */ (document.getElementById("shape"));
+    document
+      .getElementById("add-layer")
+      ?.addEventListener("click", () => layers.add());
+    const shape = /** @type {HTMLSelectElement} */ (
+      document.getElementById("shape")
+    );
     shape.dataset["path"] = "/item/shape";
     shape.addEventListener("change", () => {
       model.change(
         () => {
           model.set("/item/shape", shape.value);
-          if (shape.value === "slab") model.set("/item/inner_radius_m", undefined);
-          if (!model.hasInnerFace()) model.set("/surroundings/inner", undefined);
+          if (shape.value === "slab")
+            model.set("/item/inner_radius_m", undefined);
+          if (!model.hasInnerFace())
+            model.set("/surroundings/inner", undefined);
         },
         { structure: true },
       );

@@ -5,18 +5,26 @@ const main = {
   /** Builds the description anew; the focus stays where it was. */
   render() {
     const focused = document.activeElement?.id ?? "";
-    const title = /** @type {HTMLInputElement} */ (document.getElementById("title"));
-    if (document.activeElement !== title) title.value = model.get("/title") ?? "";
+    const title = /** @type {HTMLInputElement} */ (
+      document.getElementById("title")
+    );
+    if (document.activeElement !== title)
+      title.value = model.get("/title") ?? "";
     layers.render();
     start.render();
     faces.render();
     watch.render();
-    if (focused !== "" && document.activeElement?.id !== focused) document.getElementById(focused)?.focus();
+    if (focused !== "" && document.activeElement?.id !== focused)
+      document.getElementById(focused)?.focus();
   },
 
   buttons() {
-    /** @type {HTMLButtonElement} */ (document.getElementById("undo")).disabled = model.past.length === 0;
-    /** @type {HTMLButtonElement} */ (document.getElementById("redo")).disabled = model.future.length === 0;
+    /** @type {HTMLButtonElement} */ (
+      document.getElementById("undo")
+    ).disabled = model.past.length === 0;
+    /** @type {HTMLButtonElement} */ (
+      document.getElementById("redo")
+    ).disabled = model.future.length === 0;
   },
 
   /** Undo of the page, but not inside a field that was just typed into: there the browser's own. @param {KeyboardEvent} event */
@@ -32,7 +40,10 @@ const main = {
       return;
     }
     const at = document.activeElement;
-    const typedInto = at instanceof HTMLInputElement && at.dataset["before"] !== undefined && at.dataset["before"] !== at.value;
+    const typedInto =
+      at instanceof HTMLInputElement &&
+      at.dataset["before"] !== undefined &&
+      at.dataset["before"] !== at.value;
     if (typedInto || at instanceof HTMLTextAreaElement) return;
     event.preventDefault();
     if (back) model.undo();
@@ -46,14 +57,27 @@ const main = {
     pictures.listen();
     files.listen();
     document.addEventListener("keydown", (event) => main.keys(event));
-    document.getElementById("undo")?.addEventListener("click", () => model.undo());
-    document.getElementById("redo")?.addEventListener("click", () => model.redo());
-    document.getElementById("description")?.addEventListener("submit", (event) => event.preventDefault());
-    const title = /** @type {HTMLInputElement} */ (document.getElementById("title"));
+    document
+      .getElementById("undo")
+      ?.addEventListener("click", () => model.undo());
+    document
+      .getElementById("redo")
+      ?.addEventListener("click", () => model.redo());
+    document
+      .getElementById("description")
+      ?.addEventListener("submit", (event) => event.preventDefault());
+    const title = /** @type {HTMLInputElement} */ (
+      document.getElementById("title")
+    );
     title.addEventListener("input", () => {
-      model.change(() => model.set("/title", title.value === "" ? undefined : title.value), { typing: "/title" });
+      model.change(
+        () => model.set("/title", title.value === "" ? undefined : title.value),
+        { typing: "/title" },
+      );
     });
-    const system = /** @type {HTMLSelectElement} */ (document.getElementById("system"));
+    const system = /** @type {HTMLSelectElement} */ (
+      document.getElementById("system")
+    );
     system.value = core.us ? "us" : "metric";
     system.addEventListener("change", () => {
       core.us = system.value === "us";

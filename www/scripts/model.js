@@ -16,7 +16,10 @@ const model = {
   changed: () => {},
 
   snapshot() {
-    return JSON.stringify({ scenario: model.scenario, drafts: Object.fromEntries(model.drafts) });
+    return JSON.stringify({
+      scenario: model.scenario,
+      drafts: Object.fromEntries(model.drafts),
+    });
   },
 
   /** @param {string} text */
@@ -103,7 +106,8 @@ const model = {
   /** What a layer is called, as the core has it. @param {number} i @returns {string} */
   layerName(i) {
     const layer = model.get(`/item/layers/${i}`) ?? {};
-    if (typeof layer.name === "string" && layer.name.trim() !== "") return layer.name;
+    if (typeof layer.name === "string" && layer.name.trim() !== "")
+      return layer.name;
     const material = core.materials.find((one) => one.id === layer.material);
     return material ? material.name : `layer ${i + 1}`;
   },
@@ -111,12 +115,17 @@ const model = {
   /** @returns {string[]} */
   layerNames() {
     const layers = model.get("/item/layers");
-    return Array.isArray(layers) ? layers.map((_, i) => model.layerName(i)) : [];
+    return Array.isArray(layers)
+      ? layers.map((_, i) => model.layerName(i))
+      : [];
   },
 
   /** Has the item an inner face? */
   hasInnerFace() {
-    return model.get("/item/shape") === "slab" || (model.get("/item/inner_radius_m") ?? 0) > 0;
+    return (
+      model.get("/item/shape") === "slab" ||
+      (model.get("/item/inner_radius_m") ?? 0) > 0
+    );
   },
 
   /**
@@ -131,7 +140,8 @@ const model = {
     for (const list of ["ready_when", "must_not"]) {
       for (const condition of model.get(`/${list}`) ?? []) {
         const at = before.indexOf(condition.of);
-        if (at >= 0 && !["probe", "face"].includes(condition.what)) condition.of = after[at];
+        if (at >= 0 && !["probe", "face"].includes(condition.what))
+          condition.of = after[at];
       }
     }
   },

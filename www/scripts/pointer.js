@@ -35,7 +35,11 @@ const pointer = {
     const last = /** @type {string} */ (parts.pop());
     let at = /** @type {any} */ (root);
     for (const part of parts) {
-      if (at[part] === undefined || at[part] === null || typeof at[part] !== "object") {
+      if (
+        at[part] === undefined ||
+        at[part] === null ||
+        typeof at[part] !== "object"
+      ) {
         if (value === undefined) return;
         at[part] = {};
       }

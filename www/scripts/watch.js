@@ -4,25 +4,42 @@
 const watch = {
   /** The key of the limit and the kind of its quantity. @param {any} condition @returns {[string, string]} */
   limit(condition) {
-    if (condition.what === "difference") return ["below_k", "temperature_difference"];
+    if (condition.what === "difference")
+      return ["below_k", "temperature_difference"];
     if (condition.what === "rate") return ["below_k_per_h", "rate"];
-    return [condition.above_c === undefined ? "below_c" : "above_c", "temperature"];
+    return [
+      condition.above_c === undefined ? "below_c" : "above_c",
+      "temperature",
+    ];
   },
 
   render() {
     watch.list("ready-when", "/ready_when");
     watch.list("must-not", "/must_not");
     const probes = model.get("/probes") ?? [];
-    const place = /** @type {HTMLElement} */ (document.getElementById("probes"));
-    place.replaceChildren(.../** @type {any[]} */ (probes).map((_, i) => watch.probe(i)));
-    const more = /** @type {HTMLDetailsElement} */ (document.getElementById("more"));
-    more.open = more.open || probes.length > 0 || model.get("/look_ahead_s") !== undefined;
+    const place = /** @type {HTMLElement} */ (
+      document.getElementById("probes")
+    );
+    place.replaceChildren(
+      .../** @type {any[]} */ (probes).map((_, i) => watch.probe(i)),
+    );
+    const more = /** @type {HTMLDetailsElement} */ (
+      document.getElementById("more")
+    );
+    more.open =
+      more.open ||
+      probes.length > 0 ||
+      model.get("/look_ahead_s") !== undefined;
     const field = fields.in(more, '[data-field="/look_ahead_s"]');
-    for (const child of [...field.children]) if (child.tagName !== "LABEL") child.remove();
+    for (const child of [...field.children])
+      if (child.tagName !== "LABEL") child.remove();
     delete field.dataset["path"];
     fields.mount(more, "");
-    const notes = /** @type {HTMLTextAreaElement} */ (document.getElementById("notes"));
-    if (document.activeElement !== notes) notes.value = model.get("/notes") ?? "";
+    const notes = /** @type {HTMLTextAreaElement} */ (
+      document.getElementById("notes")
+    );
+    if (document.activeElement !== notes)
+      notes.value = model.get("/notes") ?? "";
   },
 
   /** @param {string} id @param {string} path */
@@ -30,7 +47,11 @@ const watch = {
     const list = /** @type {HTMLElement} */ (document.getElementById(id));
     list.dataset["path"] = path;
     const all = model.get(path) ?? [];
-    list.replaceChildren(.../** @type {any[]} */ (all).map((_, i) => watch.condition(`${path}/${i}`, id)));
+    list.replaceChildren(
+      .../** @type {any[]} */ (all).map((_, i) =>
+        watch.condition(`${path}/${i}`, id),
+      ),
+    );
   },
 
   /** @param {string} path @param {string} list @returns {HTMLElement} */
@@ -41,7 +62,9 @@ const watch = {
     const subject = fields.in(element, ".subject");
     watch.subjects(subject, condition);
     subject.dataset["path"] = `${path}/what`;
-    subject.addEventListener("change", () => watch.changeSubject(path, subject.value, subject.id));
+    subject.addEventListener("change", () =>
+      watch.changeSubject(path, subject.value, subject.id),
+    );
     const sense = fields.in(element, ".sense");
     const [key, kind] = watch.limit(condition);
     sense.value = key === "above_c" ? "above" : "below";
@@ -59,7 +82,10 @@ const watch = {
       document.getElementById(sense.id)?.focus();
     });
     const remove = fields.in(element, ".remove");
-    remove.setAttribute("aria-label", `Remove ${subject.selectedOptions[0]?.textContent ?? "this"}`);
+    remove.setAttribute(
+      "aria-label",
+      `Remove ${subject.selectedOptions[0]?.textContent ?? "this"}`,
+    );
     remove.addEventListener("click", () => {
       model.change(
         () => {
@@ -68,7 +94,9 @@ const watch = {
         },
         { structure: true },
       );
-      document.getElementById(list === "ready-when" ? "add-ready" : "add-limit")?.focus();
+      document
+        .getElementById(list === "ready-when" ? "add-ready" : "add-limit")
+        ?.focus();
     });
     const field = fields.in(element, ".field");
     field.dataset["field"] = key;
@@ -84,7 +112,8 @@ const watch = {
     const group = (label, options) => {
       const element = document.createElement("optgroup");
       element.label = label;
-      for (const [value, words] of options) element.append(new Option(words, value));
+      for (const [value, words] of options)
+        element.append(new Option(words, value));
       select.append(element);
     };
     /** @param {string} of @param {string} name @returns {[string, string][]} */
@@ -97,32 +126,51 @@ const watch = {
     ];
     const names = [...new Set(model.layerNames())];
     for (const name of names) group(name, region(name, name));
-    if (names.length > 1) group("The whole item", region("item", "the whole item"));
-    const sides = /** @type {[string, string][]} */ ([["face|outer", "outer face"]]);
+    if (names.length > 1)
+      group("The whole item", region("item", "the whole item"));
+    const sides = /** @type {[string, string][]} */ ([
+      ["face|outer", "outer face"],
+    ]);
     if (model.hasInnerFace()) sides.push(["face|inner", "inner face"]);
     group("Faces", sides);
-    const probes = /** @type {any[]} */ (model.get("/probes") ?? []).map((one) => /** @type {[string, string]} */ ([`probe|${one.name ?? ""}`, `at ${one.name ?? ""}`]));
+    const probes = /** @type {any[]} */ (model.get("/probes") ?? []).map(
+      (one) =>
+        /** @type {[string, string]} */ ([
+          `probe|${one.name ?? ""}`,
+          `at ${one.name ?? ""}`,
+        ]),
+    );
     if (probes.length > 0) group("Places", probes);
     const of = condition.of ?? (names.length > 1 ? "item" : names[0]);
     const value = `${condition.what}|${of}`;
     select.value = value;
     if (select.value !== value) {
-      select.append(new Option(`${condition.what} of ${of} (not there)`, value));
+      select.append(
+        new Option(`${condition.what} of ${of} (not there)`, value),
+      );
       select.value = value;
     }
   },
 
   /** @param {string} path @param {string} subject @param {string} id */
   changeSubject(path, subject, id) {
-    const [what, of] = /** @type {[string, string]} */ ([subject.slice(0, subject.indexOf("|")), subject.slice(subject.indexOf("|") + 1)]);
+    const [what, of] = /** @type {[string, string]} */ ([
+      subject.slice(0, subject.indexOf("|")),
+      subject.slice(subject.indexOf("|") + 1),
+    ]);
     const before = model.get(path);
     const [key, kind] = watch.limit(before);
     model.change(
       () => {
         const next = /** @type {any} */ ({ what, of });
-        const [nextKey, nextKind] = watch.limit({ ...next, above_c: before.above_c });
+        const [nextKey, nextKind] = watch.limit({
+          ...next,
+          above_c: before.above_c,
+        });
         if (nextKind === kind) next[nextKey] = before[key];
-        else next[nextKey] = nextKind === "temperature" ? 60 : nextKind === "rate" ? 1 : 5;
+        else
+          next[nextKey] =
+            nextKind === "temperature" ? 60 : nextKind === "rate" ? 1 : 5;
         if (next[nextKey] === undefined) delete next[nextKey];
         model.set(path, next);
         model.forget(path);
@@ -138,7 +186,8 @@ const watch = {
     const probe = model.get(path);
     const element = fields.clone("probe-template");
     element.dataset["path"] = path;
-    const key = probe.from_inside_m === undefined ? "from_outside_m" : "from_inside_m";
+    const key =
+      probe.from_inside_m === undefined ? "from_outside_m" : "from_inside_m";
     const side = fields.in(element, ".side");
     side.value = key;
     side.addEventListener("change", () => {
@@ -157,7 +206,8 @@ const watch = {
       model.change(
         () => {
           model.set(path, undefined);
-          if (model.get("/probes").length === 0) model.set("/probes", undefined);
+          if (model.get("/probes").length === 0)
+            model.set("/probes", undefined);
           model.forget("/probes");
         },
         { structure: true },
@@ -182,23 +232,43 @@ const watch = {
 
   listen() {
     document.getElementById("add-ready")?.addEventListener("click", () => {
-      watch.append("/ready_when", { what: "hottest", of: model.layerNames()[0] ?? "item", below_c: 60 });
+      watch.append("/ready_when", {
+        what: "hottest",
+        of: model.layerNames()[0] ?? "item",
+        below_c: 60,
+      });
       fields.in(document, "#ready-when > li:last-child .subject").focus();
     });
     document.getElementById("add-limit")?.addEventListener("click", () => {
-      watch.append("/must_not", { what: "coldest", of: model.layerNames()[0] ?? "item", below_c: 5 });
+      watch.append("/must_not", {
+        what: "coldest",
+        of: model.layerNames()[0] ?? "item",
+        below_c: 5,
+      });
       fields.in(document, "#must-not > li:last-child .subject").focus();
     });
     document.getElementById("add-probe")?.addEventListener("click", () => {
-      const names = new Set(/** @type {any[]} */ (model.get("/probes") ?? []).map((one) => one.name));
+      const names = new Set(
+        /** @type {any[]} */ (model.get("/probes") ?? []).map(
+          (one) => one.name,
+        ),
+      );
       let number = names.size + 1;
       while (names.has(`place ${number}`)) number += 1;
-      watch.append("/probes", { name: `place ${number}`, from_outside_m: 0.01 });
+      watch.append("/probes", {
+        name: `place ${number}`,
+        from_outside_m: 0.01,
+      });
       fields.in(document, "#probes > li:last-child input").focus();
     });
-    const notes = /** @type {HTMLTextAreaElement} */ (document.getElementById("notes"));
+    const notes = /** @type {HTMLTextAreaElement} */ (
+      document.getElementById("notes")
+    );
     notes.addEventListener("input", () => {
-      model.change(() => model.set("/notes", notes.value === "" ? undefined : notes.value), { typing: "/notes" });
+      model.change(
+        () => model.set("/notes", notes.value === "" ? undefined : notes.value),
+        { typing: "/notes" },
+      );
     });
   },
 };
