@@ -48,10 +48,10 @@ def build():
     for name, manifest in (("ours", "ours"), ("peer-diffsol", "peers/diffsol")):
         print(f"building {name}", flush=True)
         run(["cargo", "build", "--release", "--quiet", "--manifest-path", str(HERE / manifest / "Cargo.toml")])
-    meshes = [[",".join(map(str, systems.cells(name, n))) for n in systems.DOUBLINGS] for name in WORKLOADS]
-    ours = [str(TARGET / "release" / "ours"), repetitions]
-    for name, cells in zip(WORKLOADS, meshes):
-        ours += [name, str(systems.REFERENCE / f"{name}.json"), *cells]
+    ours = [str(TARGET / "release" / "ours"), repetitions, str(len(systems.DOUBLINGS))]
+    for name in WORKLOADS:
+        # Our own mesh of so many cells has the same places as that of the peers.
+        ours += [name, str(systems.REFERENCE / f"{name}.json"), str(systems.CELLS[name][0])]
     peers.append(("", OURS, ours, None))
     peers.append(("diffsol: ", COMPILED, [str(TARGET / "release" / "peer-diffsol"), repetitions], text))
     if build_cvode():

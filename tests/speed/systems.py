@@ -13,7 +13,7 @@ REFERENCE = pathlib.Path(__file__).resolve().parents[1] / "reference"
 
 # Cells of each layer on the coarsest mesh, and how nodes are drawn towards the sides of the layer.
 CELLS = {"W1": [6], "W2": [5, 1, 2]}
-DRAWN = {"W1": ["out"], "W2": ["out", "even", "both"]}
+DRAWN = {"W1": ["out"], "W2": ["out", "both", "both"]}
 DOUBLINGS = range(4)
 
 
@@ -35,7 +35,7 @@ def _places(layers, name, doublings):
         start = places[-1]
         for i in range(1, count + 1):
             s = i / count
-            drawn = {"even": s, "out": math.sin(math.pi / 2 * s), "both": 0.5 * (1 - math.cos(math.pi * s))}
+            drawn = {"out": math.sin(math.pi / 2 * s), "both": 0.5 * (1 - math.cos(math.pi * s))}
             places.append(start + layer["thickness_m"] * drawn[DRAWN[name][number]])
             layer_of_cell.append(number)
     return places, layer_of_cell
