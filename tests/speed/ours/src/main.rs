@@ -1,7 +1,7 @@
 //! Our own rows of the speed comparison: the march on a given mesh, and the whole answer.
 //!
-//! Arguments: repetitions, number of meshes, then for each workload its name, its file in `tests/reference/` and
-//! the cells across the slowest layer of its coarsest mesh; each further mesh halves all cells. Standard output,
+//! Arguments: repetitions, then for each workload its name, its file in `tests/reference/` and its meshes, each as
+//! cells across the slowest layer and how often all cells are halved: `W2 W2.json 5:0,6:0,5:1`. Standard output,
 //! one line per mesh and tolerance: `name nodes method tolerance time steps milliseconds`.
 
 use std::hint::black_box;
@@ -40,18 +40,21 @@ fn milliseconds(repetitions: usize, mut run: impl FnMut()) -> f64 {
 
 fn main() {
     let arguments: Vec<String> = std::env::args().skip(1).collect();
-    let number = |word: &String| word.parse::<usize>().expect("a number");
-    let (repetitions, meshes) = (number(&arguments[0]), number(&arguments[1]));
-    for workload in arguments[2..].chunks(3) {
+    let repetitions = number(&arguments[0]);
+    for workload in arguments[1..].chunks(3) {
         let case = std::fs::read_to_string(&workload[1]).expect("the file of the workload");
         let case: serde_json::Value = serde_json::from_str(&case).expect("JSON");
         let text = case["scenario"].to_string();
-        for halvings in 0..meshes {
-            let halvings = u32::try_from(halvings).expect("a few meshes");
-            marches(&workload[0], &text, number(&workload[2]), halvings, repetitions);
+        for written in workload[2].split(',') {
+            let (cells, halvings) = written.split_once(':').expect("cells:halvings");
+            marches(&workload[0], &text, number(cells), number(halvings), repetitions);
         }
         whole_answer(&workload[0], &text, repetitions);
     }
+}
+
+fn number<T: std::str::FromStr>(word: &str) -> T {
+    word.parse().ok().expect("a number")
 }
 
 fn marches(name: &str, text: &str, cells: usize, halvings: u32, repetitions: usize) {
