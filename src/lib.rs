@@ -52,12 +52,12 @@ pub fn solve(text: &str) -> Result<Solved, Vec<Problem>> {
         let words = format!("the steady state of the earlier surroundings was not found ({error})");
         vec![Problem::error("/start/steady_before", Trouble::Contradiction { words })]
     })?;
-    let about = Circumstances {
-        title: checked.title.clone(),
-        clock: checked.clock,
-        warnings: checked.warnings.clone(),
-        by_hand: Vec::new(),
-    };
+    let (item, clock) = (&checked.item, checked.clock);
+    let (by_hand, disagreements) = answer::by_hand(item, &resolved, clock);
+    let mut warnings = checked.warnings.clone();
+    warnings.extend(answer::still_liquid_warnings(item, &checked.still_liquids, &resolved, clock));
+    warnings.extend(disagreements);
+    let about = Circumstances { title: checked.title.clone(), clock, warnings, by_hand };
     let report = answer::report(&checked.item, &resolved, about);
     Ok(Solved { scenario, checked, resolved, report })
 }

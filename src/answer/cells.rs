@@ -44,10 +44,9 @@ fn diffusion_time(item: &Item, number: usize) -> f64 {
 /// A temperature to take properties at where only their size matters, K.
 fn typical_temperature(item: &Item) -> f64 {
     match item.start() {
-        Start::Uniform(temperature) => *temperature,
+        Start::Uniform(temperature) | Start::SteadyBefore { contents: Some(temperature), .. } => *temperature,
         Start::PerLayer(all) => all.iter().sum::<f64>() / all.len() as f64,
         Start::Profile(points) => points.iter().map(|point| point.1).sum::<f64>() / points.len() as f64,
-        Start::SteadyBefore { contents: Some(temperature), .. } => *temperature,
         Start::SteadyBefore { inner, outer, .. } => {
             let (low, high) = [inner, outer]
                 .iter()

@@ -56,10 +56,10 @@ fn check(scenario: &Scenario, problems: &mut Vec<Problem>) -> Option<Checked> {
     let inner = face_programme(&scenario.surroundings.inner, "/surroundings/inner", problems);
     let outer = face_programme(&scenario.surroundings.outer, "/surroundings/outer", problems);
     let (layers, inner, outer) = (layers?, inner?, outer?);
-    let thickness: f64 = layers.layers.iter().map(|layer| layer.thickness).sum();
-    let start = start(scenario, shape, thickness, layers.layers.len(), problems);
+    let thickness: f64 = layers.all.iter().map(|layer| layer.thickness).sum();
+    let start = start(scenario, shape, thickness, layers.all.len(), problems);
     let probes = probes(&scenario.probes, thickness, problems);
-    let places = super::check_watch::Places { layers: &layers.layers, probes: &probes, shape };
+    let places = super::check_watch::Places { layers: &layers.all, probes: &probes, shape };
     let ready_when = conditions(&scenario.ready_when, "/ready_when", &places, problems);
     let must_not = conditions(&scenario.must_not, "/must_not", &places, problems);
     let item = Item {
@@ -71,7 +71,7 @@ fn check(scenario: &Scenario, problems: &mut Vec<Problem>) -> Option<Checked> {
         ready_when: ready_when?,
         must_not: must_not?,
         look_ahead: scenario.look_ahead_s.unwrap_or(LOOK_AHEAD),
-        layers: layers.layers,
+        layers: layers.all,
     };
     super::unusual::warn(&item, &layers.materials, problems);
     Some(Checked {

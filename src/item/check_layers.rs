@@ -12,14 +12,14 @@ const THIN_LIQUID: f64 = 0.005;
 
 /// The layers with what is known of their materials.
 pub(super) struct Layers {
-    pub layers: Vec<Layer>,
+    pub all: Vec<Layer>,
     /// The library material of each layer, if one.
     pub materials: Vec<Option<Material>>,
     pub still_liquids: Vec<(usize, Material)>,
 }
 
 pub(super) fn layers(written: &[WrittenLayer], problems: &mut Vec<Problem>) -> Option<Layers> {
-    let mut all = Layers { layers: Vec::new(), materials: Vec::new(), still_liquids: Vec::new() };
+    let mut found = Layers { all: Vec::new(), materials: Vec::new(), still_liquids: Vec::new() };
     let mut sound = true;
     for (number, layer) in written.iter().enumerate() {
         let path = format!("/item/layers/{number}");
@@ -31,12 +31,12 @@ pub(super) fn layers(written: &[WrittenLayer], problems: &mut Vec<Problem>) -> O
             && made.motion == Motion::Still
             && made.thickness > THIN_LIQUID
         {
-            all.still_liquids.push((number, material.clone()));
+            found.still_liquids.push((number, material.clone()));
         }
-        all.layers.extend(made);
-        all.materials.push(material);
+        found.all.extend(made);
+        found.materials.push(material);
     }
-    sound.then_some(all)
+    sound.then_some(found)
 }
 
 fn material(layer: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Option<Material> {

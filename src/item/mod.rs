@@ -255,6 +255,14 @@ impl Item {
         self.look_ahead
     }
 
+    /// The same item with another motion of one layer.
+    #[must_use]
+    pub fn with_motion(&self, layer: usize, motion: Motion) -> Self {
+        let mut other = self.clone();
+        other.layers[layer].motion = motion;
+        other
+    }
+
     /// Sum of the thicknesses, m.
     pub fn thickness(&self) -> f64 {
         self.layers.iter().map(|layer| layer.thickness).sum()

@@ -1,7 +1,7 @@
 //! From an answer to the columns of numbers that the pictures show.
 
 use super::curve::{Curve, CurveLine};
-use super::profile::Profile;
+use super::profile::{Profile, ProfileLayer};
 use super::section::{Outline, Section, SectionLayer};
 use super::table::Table;
 use crate::Solved;
@@ -78,7 +78,7 @@ impl<'a> Shown<'a> {
             let edges = (from, from + layer.thickness);
             from = edges.1;
             let shown = (self.system.length(edges.0), self.system.length(edges.1));
-            (layer.name.clone(), *nodes, shown)
+            ProfileLayer { name: layer.name.clone(), nodes: *nodes, edges: shown }
         });
         Profile {
             layers: layers.collect(),

@@ -16,7 +16,7 @@ pub use curve::{Curve, CurveLine, curve};
 pub use gather::Shown;
 pub use painter::{Anchor, Colour, Painter, Stroke, Type};
 pub use palette::{Theme, ramp};
-pub use profile::{Profile, profile};
+pub use profile::{Profile, ProfileLayer, profile};
 pub use section::{Outline, Section, SectionLayer, section};
 pub use svg::Svg;
 pub use table::Table;

@@ -5,6 +5,17 @@ use super::curve::{Field, degrees};
 use super::painter::{Anchor, Painter, Stroke, Type, fitting};
 use super::palette::{Inks, Theme};
 
+/// One layer of the picture.
+#[derive(Clone, Debug)]
+pub struct ProfileLayer {
+    /// What it is called.
+    pub name: String,
+    /// Its first and its last node.
+    pub nodes: (usize, usize),
+    /// Where it begins and ends, in the unit shown.
+    pub edges: (f64, f64),
+}
+
 /// What the picture shows.
 #[derive(Clone, Debug)]
 pub struct Profile<'a> {
@@ -14,8 +25,8 @@ pub struct Profile<'a> {
     pub now: &'a [f64],
     /// At the start.
     pub start: &'a [f64],
-    /// Each layer: name, first and last node, where it begins and ends in the unit shown.
-    pub layers: Vec<(String, (usize, usize), (f64, f64))>,
+    /// From the inside out.
+    pub layers: Vec<ProfileLayer>,
     /// "°C"
     pub unit: &'static str,
     /// "mm"
@@ -29,7 +40,7 @@ const SMALL: f64 = 12.0;
 /// Draws the profile into a picture of this size, px.
 pub fn profile(on: &mut dyn Painter, width: f64, height: f64, theme: Theme, what: &Profile<'_>) {
     let inks = theme.inks();
-    let outer = what.layers.last().map_or(1.0, |layer| layer.2.1);
+    let outer = what.layers.last().map_or(1.0, |layer| layer.edges.1);
     let room = (0.06 * (what.extent.1 - what.extent.0)).max(0.5);
     let field = Field {
         left: 38.0,
@@ -49,7 +60,7 @@ pub fn profile(on: &mut dyn Painter, width: f64, height: f64, theme: Theme, what
 /// Layer by layer, so that a joint that resists shows as a jump; one that mixes itself as a level line.
 fn line(on: &mut dyn Painter, field: &Field, what: &Profile<'_>, temperatures: &[f64], stroke: Stroke) {
     let mut points = Vec::new();
-    for (_, (first, last), (from, to)) in &what.layers {
+    for ProfileLayer { nodes: (first, last), edges: (from, to), .. } in &what.layers {
         if first == last {
             let y = field.up(temperatures[*first]);
             points.extend([(field.across(*from), y), (field.across(*to), y)]);
@@ -63,7 +74,7 @@ fn line(on: &mut dyn Painter, field: &Field, what: &Profile<'_>, temperatures: &
 
 fn name_layers(on: &mut dyn Painter, field: &Field, what: &Profile<'_>, inks: &Inks) {
     let set = Type { size: SMALL, bold: true, anchor: Anchor::Middle, colour: inks.ink };
-    for (name, _, (from, to)) in &what.layers {
+    for ProfileLayer { name, edges: (from, to), .. } in &what.layers {
         let (left, right) = (field.across(*from), field.across(*to));
         let edge = Stroke { colour: inks.soft, width: 1.0, dash: &[] };
         on.line(&[(right, field.top), (right, field.bottom)], edge);

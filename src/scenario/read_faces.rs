@@ -148,6 +148,7 @@ fn over_time_flux(at: &At<'_>) -> Option<OverTimeFlux> {
     })
 }
 
+#[allow(clippy::option_option, reason = "read or not, and whether it was sound, are two questions")]
 /// None: it is a plain number or a spread. Some(None): it could not be read.
 fn varying(at: &At<'_>, keys: &'static Keys) -> Option<Option<Varying>> {
     let has = |keys: &[&str]| keys.iter().any(|key| at.has(key));

@@ -53,7 +53,7 @@ fn wanted() -> Result<Wanted, lexopt::Error> {
         match argument {
             Long("text") => wanted.text = true,
             Long("pictures") => wanted.pictures = Some(arguments.value()?.into()),
-            Long("help") | Short('h') => wanted.command = "help".to_owned(),
+            Long("help") | Short('h') => "help".clone_into(&mut wanted.command),
             Value(word) if wanted.command.is_empty() => wanted.command = word.string()?,
             Value(operand) => wanted.operands.push(operand.into()),
             _ => return Err(argument.unexpected()),
