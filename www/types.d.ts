@@ -30,7 +30,11 @@ interface State {
 }
 
 type Outcome =
-  | { kind: "already"; lost_again_s: number | null; for_good_from_s: number | null }
+  | {
+      kind: "already";
+      lost_again_s: number | null;
+      for_good_from_s: number | null;
+    }
   | {
       kind: "at";
       time_s: number;
@@ -137,7 +141,11 @@ declare class Page {
     theme: Theme,
     system: System,
   ): void;
-  table(picture: PictureName, time_s: number, system: System): NumberTable | null;
+  table(
+    picture: PictureName,
+    time_s: number,
+    system: System,
+  ): NumberTable | null;
   moment(time_s: number): Moment | null;
 }
 
@@ -147,7 +155,13 @@ interface Door {
   Page: typeof Page;
   read(text: string, kind: string, system: System): Reading;
   write(written: string, kind: string, system: System): string;
-  step(text: string, kind: string, system: System, up: boolean, large: boolean): string | undefined;
+  step(
+    text: string,
+    kind: string,
+    system: System,
+    up: boolean,
+    large: boolean,
+  ): string | undefined;
   layer_names(layers: string): string[];
   materials(): Material[];
   choices(of: string): Choice[];

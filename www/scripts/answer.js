@@ -14,7 +14,9 @@ const answer = {
       answer.showBug();
       return;
     }
-    const errors = solution.problems.filter(({ severity }) => severity === "error");
+    const errors = solution.problems.filter(
+      ({ severity }) => severity === "error",
+    );
     fields.report(solution.problems);
     if (solution.report !== null) {
       answer.report = solution.report;
@@ -34,14 +36,20 @@ const answer = {
   /** @param {Report} report */
   showReport(report) {
     const headline = dom.byId("answer-headline", HTMLOutputElement);
-    headline.replaceChildren(answer.timed(report.headline, report.ready ?? report.standing));
+    headline.replaceChildren(
+      answer.timed(report.headline, report.ready ?? report.standing),
+    );
     dom.byId("answer-detail", HTMLElement).textContent = report.detail;
     const rows = [...report.ready_when, ...report.must_not];
-    dom.byId("conditions", HTMLElement).replaceChildren(...rows.map(answer.outcome));
+    dom
+      .byId("conditions", HTMLElement)
+      .replaceChildren(...rows.map(answer.outcome));
     dom.byId("foot", HTMLElement).textContent = report.headline;
     answer.showList("cautions", report.cautions);
     answer.showWarnings(report.warnings);
-    dom.byId("sure-rows", HTMLElement).replaceChildren(...report.checks.map(answer.check));
+    dom
+      .byId("sure-rows", HTMLElement)
+      .replaceChildren(...report.checks.map(answer.check));
     answer.showHand(report);
     pictures.show(report);
   },
@@ -53,7 +61,8 @@ const answer = {
    * @returns {Node}
    */
   timed(words, outcome) {
-    if (outcome?.kind !== "at" || outcome.clock === undefined) return document.createTextNode(words);
+    if (outcome?.kind !== "at" || outcome.clock === undefined)
+      return document.createTextNode(words);
     const time = dom.make("time", words);
     time.dateTime = outcome.clock;
     return time;
@@ -67,7 +76,10 @@ const answer = {
   outcome(condition) {
     const row = dom.make("li");
     const limit = condition.path.startsWith("/must_not");
-    row.append(dom.make("span", `${limit ? "must not: " : ""}${condition.words}`), " ");
+    row.append(
+      dom.make("span", `${limit ? "must not: " : ""}${condition.words}`),
+      " ",
+    );
     const words = dom.make("strong");
     words.append(answer.timed(condition.outcome_words, condition.outcome));
     row.append(words);
@@ -93,7 +105,9 @@ const answer = {
    */
   showList(id, words) {
     dom.byId(id, HTMLElement).hidden = words.length === 0;
-    dom.byId(`${id}-list`, HTMLElement).replaceChildren(...words.map((one) => dom.make("li", one)));
+    dom
+      .byId(`${id}-list`, HTMLElement)
+      .replaceChildren(...words.map((one) => dom.make("li", one)));
   },
 
   /** @param {Problem[]} warnings */
@@ -116,11 +130,14 @@ const answer = {
     if (control !== undefined && place !== "") {
       const link = dom.make("a", place);
       link.href = `#${control.id}`;
-      link.addEventListener("click", (event) => answer.follow(event, problem.path));
+      link.addEventListener("click", (event) =>
+        answer.follow(event, problem.path),
+      );
       row.append(link, ": ");
     }
     row.append(problem.kind === "needed" ? fields.wanted(problem) : words);
-    if (problem.kind === "unknown") row.append(" ", answer.dropKey(problem.path));
+    if (problem.kind === "unknown")
+      row.append(" ", answer.dropKey(problem.path));
     return row;
   },
 
@@ -144,7 +161,12 @@ const answer = {
   dropKey(path) {
     const name = pointer.last(path);
     const drop = () =>
-      scenario.reshape(`"${name}" taken out`, path, () => scenario.set(path, undefined), "answer");
+      scenario.reshape(
+        `"${name}" taken out`,
+        path,
+        () => scenario.set(path, undefined),
+        "answer",
+      );
     return dom.button(`Take "${name}" out`, drop, "quiet");
   },
 
@@ -156,11 +178,18 @@ const answer = {
     const stale = errors.length > 0 && answer.report !== null;
     document.body.classList.toggle("stale", stale);
     dom.byId("troubles", HTMLElement).hidden = errors.length === 0;
-    dom.byId("troubles-title", HTMLElement).textContent = answer.count(errors, stale);
-    dom.byId("troubles-list", HTMLElement).replaceChildren(...errors.map(answer.linked));
+    dom.byId("troubles-title", HTMLElement).textContent = answer.count(
+      errors,
+      stale,
+    );
+    dom
+      .byId("troubles-list", HTMLElement)
+      .replaceChildren(...errors.map(answer.linked));
     if (answer.report !== null) {
       const { headline } = answer.report;
-      dom.byId("foot", HTMLElement).textContent = stale ? `The last answer: ${headline}` : headline;
+      dom.byId("foot", HTMLElement).textContent = stale
+        ? `The last answer: ${headline}`
+        : headline;
       document.title = stale ? "Stillheat" : `${headline} · Stillheat`;
       return;
     }
@@ -178,17 +207,24 @@ const answer = {
    * @returns {string}
    */
   count(errors, stale) {
-    const needed = errors.every(({ kind, path }) => kind === "needed" || fields.isEmpty(path));
+    const needed = errors.every(
+      ({ kind, path }) => kind === "needed" || fields.isEmpty(path),
+    );
     const many = errors.length === 1 ? "one entry" : `${errors.length} entries`;
     const verb = errors.length === 1 ? "needs" : "need";
-    const words = needed ? `${many} still to be made:` : `${many} ${verb} a look:`;
-    return stale ? `This is the last answer; ${words}` : words.charAt(0).toUpperCase() + words.slice(1);
+    const words = needed
+      ? `${many} still to be made:`
+      : `${many} ${verb} a look:`;
+    return stale
+      ? `This is the last answer; ${words}`
+      : words.charAt(0).toUpperCase() + words.slice(1);
   },
 
   /** @param {boolean} there */
   showPresence(there) {
     document.body.classList.remove("broken");
-    for (const id of ["pictures", "sure"]) dom.byId(id, HTMLElement).hidden = !there;
+    for (const id of ["pictures", "sure"])
+      dom.byId(id, HTMLElement).hidden = !there;
     if (!there) dom.byId("cautions", HTMLElement).hidden = true;
   },
 
@@ -197,16 +233,26 @@ const answer = {
    * @returns {string}
    */
   spoken(errors) {
-    if (errors.length > 0) return answer.count(errors, answer.report !== null).replace(/:$/, ".");
-    return answer.report === null ? "" : `${answer.report.headline}. ${answer.report.detail}`;
+    if (errors.length > 0)
+      return answer.count(errors, answer.report !== null).replace(/:$/, ".");
+    return answer.report === null
+      ? ""
+      : `${answer.report.headline}. ${answer.report.detail}`;
   },
 
   /** @param {Report} report */
   showHand(report) {
-    const words = new Map([...report.ready_when, ...report.must_not].map((one) => [one.path, one.words]));
-    const blocks = report.by_hand.map((formula) => answer.hand(formula, words.get(formula.path) ?? ""));
-    dom.byId("hand", HTMLElement).replaceChildren(...blocks);
-    dom.byId("hand-title", HTMLElement).hidden = blocks.length === 0;
+    const words = new Map(
+      [...report.ready_when, ...report.must_not].map((one) => [
+        one.path,
+        one.words,
+      ]),
+    );
+    const blocks = report.by_hand.map((formula) =>
+      answer.hand(formula, words.get(formula.path) ?? ""),
+    );
+    dom.byId("hand-list", HTMLElement).replaceChildren(...blocks);
+    dom.byId("hand", HTMLElement).hidden = blocks.length === 0;
   },
 
   /**
@@ -215,12 +261,23 @@ const answer = {
    * @returns {HTMLElement}
    */
   hand(formula, condition) {
-    const block = dom.make("div", "", formula.holds ? "by-hand" : "by-hand does-not-hold");
+    const block = dom.make(
+      "div",
+      "",
+      formula.holds ? "by-hand" : "by-hand does-not-hold",
+    );
     const head = dom.make("p");
-    head.append(dom.make("strong", formula.name), `, ${formula.holds ? "which holds here" : "which does not hold here"}: `);
+    head.append(
+      dom.make("strong", formula.name),
+      `, ${formula.holds ? "which holds here" : "which does not hold here"}: `,
+    );
     head.append(dom.make("span", formula.gives, "gives"));
-    const about = condition === "" ? "" : `For ${condition}. `;
-    block.append(head, dom.make("p", `${about}${formula.validity}.`, "note"), dom.make("p", formula.formula, "note formula"));
+    const about = condition === "" ? "" : `For ${condition}: `;
+    block.append(
+      head,
+      dom.make("p", `${about}${formula.validity}.`, "note"),
+      dom.make("p", formula.formula, "note formula"),
+    );
     return block;
   },
 
@@ -235,7 +292,8 @@ const answer = {
       `Your entries are all here. Please save the scenario and hand it on with these words, so that it can be mended: ${core.bug}`;
     dom.byId("foot", HTMLElement).textContent = words;
     dom.byId("conditions", HTMLElement).replaceChildren();
-    for (const id of ["pictures", "sure", "cautions", "troubles"]) dom.byId(id, HTMLElement).hidden = true;
+    for (const id of ["pictures", "sure", "cautions", "troubles"])
+      dom.byId(id, HTMLElement).hidden = true;
     announce.soon(words);
   },
 };

@@ -8,10 +8,14 @@ const conditions = {
   render() {
     for (const list of conditions.lists) {
       const rows = scenario.list(`/${list}`);
-      dom.byId(list, HTMLElement).replaceChildren(...rows.map((_, i) => conditions.block(list, i)));
+      dom
+        .byId(list, HTMLElement)
+        .replaceChildren(...rows.map((_, i) => conditions.block(list, i)));
     }
-    dom.byId("ready-note", HTMLElement).hidden = scenario.list("/ready_when").length < 2;
-    dom.byId("must-note", HTMLElement).hidden = scenario.list("/must_not").length === 0;
+    dom.byId("ready-note", HTMLElement).hidden =
+      scenario.list("/ready_when").length < 2;
+    dom.byId("must-note", HTMLElement).hidden =
+      scenario.list("/must_not").length === 0;
   },
 
   /**
@@ -22,12 +26,15 @@ const conditions = {
   block(list, i) {
     const base = `/${list}/${i}`;
     const made = dom.copy("condition-template");
-    dom.find(made, "legend", HTMLElement).textContent = `${list === "must_not" ? "Limit" : "Condition"} ${i + 1}`;
+    const name = `${list === "must_not" ? "Limit" : "Condition"} ${i + 1}`;
+    dom.find(made, "legend", HTMLElement).textContent = name;
     const what = String(scenario.get(`${base}/what`) ?? "");
     conditions.bindWhat(made, base, what);
     conditions.bindOf(made, base, what);
     conditions.bindLimit(made, base, what);
-    dom.find(made, "[data-remove]", HTMLButtonElement).addEventListener("click", () => conditions.remove(list, i));
+    const remove = dom.find(made, "[data-remove]", HTMLButtonElement);
+    remove.setAttribute("aria-label", `Remove: ${name}`);
+    remove.addEventListener("click", () => conditions.remove(list, i));
     fields.bind(made, base);
     return made;
   },
@@ -38,10 +45,18 @@ const conditions = {
    * @param {string} what
    */
   bindWhat(made, base, what) {
-    const { control } = fields.add(dom.find(made, '[data-kind="what"]', HTMLElement), `${base}/what`);
+    const { control } = fields.add(
+      dom.find(made, '[data-kind="what"]', HTMLElement),
+      `${base}/what`,
+    );
     control.value = what;
     control.addEventListener("change", () =>
-      scenario.reshape("What is watched", base, () => conditions.watch(base, control.value), control.id),
+      scenario.reshape(
+        "What is watched",
+        base,
+        () => conditions.watch(base, control.value),
+        control.id,
+      ),
     );
   },
 
@@ -53,7 +68,9 @@ const conditions = {
   watch(base, what) {
     const old = /** @type {JsonObject} */ (scenario.get(base));
     const [first] = conditions.subjects(what);
-    const kept = conditions.subjects(what).some(([name]) => name === (old["of"] ?? "item"));
+    const kept = conditions
+      .subjects(what)
+      .some(([name]) => name === (old["of"] ?? "item"));
     let of = kept ? old["of"] : first?.[0];
     if (what === "probe" && first === undefined) of = probes.append();
     const limit = conditions.limitKey(what, old);
@@ -86,7 +103,12 @@ const conditions = {
       const outer = /** @type {[string, string]} */ (["outer", "outside"]);
       return layers.isHollow() ? [outer, ["inner", "inside"]] : [outer];
     }
-    return [["item", "the whole item"], ...layers.names().map((name) => /** @type {[string, string]} */ ([name, name]))];
+    return [
+      ["item", "the whole item"],
+      ...layers
+        .names()
+        .map((name) => /** @type {[string, string]} */ ([name, name])),
+    ];
   },
 
   /**
@@ -96,17 +118,29 @@ const conditions = {
    */
   bindOf(made, base, what) {
     const path = `${base}/of`;
-    const { box } = fields.add(dom.find(made, '[data-kind="of"]', HTMLElement), path);
+    const { box } = fields.add(
+      dom.find(made, '[data-kind="of"]', HTMLElement),
+      path,
+    );
     const select = dom.find(box, "select", HTMLSelectElement);
     const written = scenario.get(path);
     const subjects = conditions.subjects(what);
-    for (const [value, words] of subjects) select.append(new Option(words, value));
-    const of = String(written ?? (what === "probe" || what === "face" ? "" : "item"));
+    for (const [value, words] of subjects)
+      select.append(new Option(words, value));
+    const of = String(
+      written ?? (what === "probe" || what === "face" ? "" : "item"),
+    );
     // A name that is not there any more stands as it was written, with its message.
-    if (!subjects.some(([value]) => value === of)) select.append(new Option(of, of));
+    if (!subjects.some(([value]) => value === of))
+      select.append(new Option(of, of));
     select.value = of;
     select.addEventListener("change", () =>
-      scenario.reshape("Of which", path, () => scenario.set(path, select.value), select.id),
+      scenario.reshape(
+        "Of which",
+        path,
+        () => scenario.set(path, select.value),
+        select.id,
+      ),
     );
   },
 
@@ -117,13 +151,26 @@ const conditions = {
    */
   bindLimit(made, base, what) {
     const written = scenario.get(base);
-    const fallback = conditions.limitKey(what, pointer.isObject(written) ? written : {});
-    const key = conditions.limits.find((limit) => pointer.isObject(written) && limit in written) ?? fallback;
-    const kinds = /** @type {Record<string, string>} */ ({ below_k: "temperature_difference", below_k_per_h: "rate" });
+    const fallback = conditions.limitKey(
+      what,
+      pointer.isObject(written) ? written : {},
+    );
+    const key =
+      conditions.limits.find(
+        (limit) => pointer.isObject(written) && limit in written,
+      ) ?? fallback;
+    const kinds = /** @type {Record<string, string>} */ ({
+      below_k: "temperature_difference",
+      below_k_per_h: "rate",
+    });
     const limit = dom.find(made, '[data-kind="limit"]', HTMLElement);
     limit.dataset["kind"] = kinds[key] ?? "temperature";
     limit.dataset["at"] = key;
-    conditions.bindSense(dom.find(made, '[data-kind="sense"]', HTMLElement), base, key);
+    conditions.bindSense(
+      dom.find(made, '[data-kind="sense"]', HTMLElement),
+      base,
+      key,
+    );
   },
 
   /**
@@ -141,21 +188,13 @@ const conditions = {
     }
     select.value = key;
     const change = () => {
-      const { [key]: limit, ...rest } = /** @type {JsonObject} */ (scenario.get(base));
+      const { [key]: limit, ...rest } = /** @type {JsonObject} */ (
+        scenario.get(base)
+      );
       scenario.set(base, { ...rest, [select.value]: limit ?? "" });
     };
-    select.addEventListener("change", () => scenario.reshape("Below or above", base, change, select.id));
-  },
-
-  /**
-   * Does any condition speak of this?
-   * @param {string} what
-   * @param {Json | undefined} of
-   * @returns {boolean}
-   */
-  speakOf(what, of) {
-    return conditions.lists.some((list) =>
-      scenario.list(`/${list}`).some((one) => pointer.isObject(one) && one["what"] === what && one["of"] === of),
+    select.addEventListener("change", () =>
+      scenario.reshape("Below or above", base, change, select.id),
     );
   },
 
@@ -167,9 +206,15 @@ const conditions = {
   rename(names, whose = "layer") {
     for (const list of conditions.lists) {
       for (const [i, one] of scenario.list(`/${list}`).entries()) {
-        if (!pointer.isObject(one) || one["what"] === "face" || (one["what"] === "probe") !== (whose === "probe")) continue;
+        if (
+          !pointer.isObject(one) ||
+          one["what"] === "face" ||
+          (one["what"] === "probe") !== (whose === "probe")
+        )
+          continue;
         const name = names.get(one["of"]);
-        if (name !== undefined && name !== one["of"]) scenario.set(`/${list}/${i}/of`, name);
+        if (name !== undefined && name !== one["of"])
+          scenario.set(`/${list}/${i}/of`, name);
       }
     }
   },
@@ -178,9 +223,17 @@ const conditions = {
   add(list) {
     const at = scenario.list(`/${list}`).length;
     const first =
-      list === "must_not" ? { what: "coldest", below_c: "" } : { what: "hottest", below_c: "" };
-    const change = () => scenario.set(`/${list}`, [...scenario.list(`/${list}`), first]);
-    scenario.reshape("Condition added", `/${list}`, change, fields.id(`/${list}/${at}/what`));
+      list === "must_not"
+        ? { what: "coldest", below_c: "" }
+        : { what: "hottest", below_c: "" };
+    const change = () =>
+      scenario.set(`/${list}`, [...scenario.list(`/${list}`), first]);
+    scenario.reshape(
+      "Condition added",
+      `/${list}`,
+      change,
+      fields.id(`/${list}/${at}/what`),
+    );
   },
 
   /**

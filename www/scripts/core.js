@@ -10,8 +10,9 @@ const core = {
 
   /** Takes the program out of the page and starts it. */
   start() {
-    const text = dom.byId("core", HTMLScriptElement).textContent.trim();
-    const bytes = Uint8Array.from(atob(text), (letter) => letter.charCodeAt(0));
+    const text = atob(dom.byId("core", HTMLScriptElement).textContent.trim());
+    const bytes = new Uint8Array(text.length);
+    for (let i = 0; i < text.length; i += 1) bytes[i] = text.charCodeAt(i);
     wasm_bindgen.initSync({ module: new WebAssembly.Module(bytes) });
     core.page = new wasm_bindgen.Page();
   },
@@ -54,7 +55,10 @@ const core = {
    */
   solve(text) {
     core.bug = "";
-    return core.ask((page) => page.solve(text), /** @type {Solution | null} */ (null));
+    return core.ask(
+      (page) => page.solve(text),
+      /** @type {Solution | null} */ (null),
+    );
   },
 
   /**
@@ -63,7 +67,9 @@ const core = {
    * @returns {Reading}
    */
   read(text, kind) {
-    return core.ask((_, door) => door.read(text, kind, store.system), { message: "This cannot be read" });
+    return core.ask((_, door) => door.read(text, kind, store.system), {
+      message: "This cannot be read",
+    });
   },
 
   /**
@@ -72,7 +78,10 @@ const core = {
    * @returns {string}
    */
   write(written, kind) {
-    return core.ask((_, door) => door.write(JSON.stringify(written), kind, store.system), "");
+    return core.ask(
+      (_, door) => door.write(JSON.stringify(written), kind, store.system),
+      "",
+    );
   },
 
   /**
@@ -83,7 +92,10 @@ const core = {
    * @returns {string | undefined}
    */
   step(text, kind, up, large) {
-    return core.ask((_, door) => door.step(text, kind, store.system, up, large), undefined);
+    return core.ask(
+      (_, door) => door.step(text, kind, store.system, up, large),
+      undefined,
+    );
   },
 
   /** @type {Material[] | null} */

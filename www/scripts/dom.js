@@ -11,7 +11,8 @@ const dom = {
    */
   byId(id, type) {
     const found = document.getElementById(id);
-    if (!(found instanceof type)) throw new Error(`the page has no ${type.name} "${id}"`);
+    if (!(found instanceof type))
+      throw new Error(`the page has no ${type.name} "${id}"`);
     return found;
   },
 
@@ -25,7 +26,8 @@ const dom = {
    */
   find(root, selector, type) {
     const found = root.querySelector(selector);
-    if (!(found instanceof type)) throw new Error(`no ${type.name} "${selector}" here`);
+    if (!(found instanceof type))
+      throw new Error(`no ${type.name} "${selector}" here`);
     return found;
   },
 
@@ -36,7 +38,9 @@ const dom = {
    * @returns {HTMLElement[]}
    */
   all(root, selector) {
-    return [...root.querySelectorAll(selector)].filter((found) => found instanceof HTMLElement);
+    return [...root.querySelectorAll(selector)].filter(
+      (found) => found instanceof HTMLElement,
+    );
   },
 
   /**
@@ -46,7 +50,8 @@ const dom = {
    */
   copy(id) {
     const fragment = dom.byId(id, HTMLTemplateElement).content.cloneNode(true);
-    if (!(fragment instanceof DocumentFragment)) throw new Error(`"${id}" is no template`);
+    if (!(fragment instanceof DocumentFragment))
+      throw new Error(`"${id}" is no template`);
     return fragment;
   },
 

@@ -8,8 +8,15 @@ const faces = {
   kinds: ["exchange", "held_c", "heat_flux_into_w_per_m2", "insulated"],
 
   render() {
-    const sides = layers.isHollow() || scenario.get("/surroundings/inner") !== undefined ? ["outer", "inner"] : ["outer"];
-    dom.byId("faces", HTMLElement).replaceChildren(...sides.map((side) => faces.face(side, sides.length > 1)));
+    const sides =
+      layers.isHollow() || scenario.get("/surroundings/inner") !== undefined
+        ? ["outer", "inner"]
+        : ["outer"];
+    dom
+      .byId("faces", HTMLElement)
+      .replaceChildren(
+        ...sides.map((side) => faces.face(side, sides.length > 1)),
+      );
   },
 
   /**
@@ -27,7 +34,8 @@ const faces = {
     const rows = scenario.list(base);
     const count = Math.max(1, rows.length);
     const box = dom.find(made, ".rows", HTMLElement);
-    for (let i = 0; i < count; i += 1) box.append(faces.row(pointer.join(base, i), i, count));
+    for (let i = 0; i < count; i += 1)
+      box.append(faces.row(pointer.join(base, i), i, count));
     const add = dom.find(made, "[data-add-row]", HTMLButtonElement);
     add.id = `then${base}`;
     add.addEventListener("click", () => faces.addRow(base));
@@ -45,14 +53,20 @@ const faces = {
   row(base, i, count) {
     const made = dom.copy("row-template");
     const group = dom.find(made, ".row", HTMLElement);
-    group.setAttribute("aria-label", i === 0 ? "From the stop on" : `Row ${i + 1}`);
-    if (i === 0 && scenario.get(pointer.join(base, "from_s")) === undefined) dom.find(made, ".from", HTMLElement).remove();
+    group.setAttribute(
+      "aria-label",
+      i === 0 ? "From the stop on" : `Row ${i + 1}`,
+    );
+    if (i === 0 && scenario.get(pointer.join(base, "from_s")) === undefined)
+      dom.find(made, ".from", HTMLElement).remove();
     const kind = faces.kind(base);
     faces.bindKind(made, base, kind);
-    for (const box of dom.all(made, ".over-time")) faces.fillOverTime(box, base, kind);
+    for (const box of dom.all(made, ".over-time"))
+      faces.fillOverTime(box, base, kind);
     if (kind !== "exchange") {
       for (const key of ["film_w_per_m2_k", "emissivity"]) {
-        if (scenario.get(pointer.join(base, key)) === undefined) dom.find(made, `[data-at="${key}"]`, HTMLElement).remove();
+        if (scenario.get(pointer.join(base, key)) === undefined)
+          dom.find(made, `[data-at="${key}"]`, HTMLElement).remove();
       }
     }
     const remove = dom.find(made, "[data-remove]", HTMLButtonElement);
@@ -73,7 +87,10 @@ const faces = {
     const there = scenario.get(path) !== undefined;
     const exchanges = kind === "exchange";
     const wanted = key === kind || (exchanges && key === "temperature_c");
-    const offered = exchanges && key === "radiation_to_c" && scenario.get(pointer.join(base, "emissivity")) !== undefined;
+    const offered =
+      exchanges &&
+      key === "radiation_to_c" &&
+      scenario.get(pointer.join(base, "emissivity")) !== undefined;
     if (there || wanted || offered) overTime.render(box, path);
     else box.remove();
   },
@@ -85,7 +102,10 @@ const faces = {
   kind(base) {
     const row = scenario.get(base);
     if (row === undefined) return "insulated";
-    return faces.kinds.find((kind) => pointer.isObject(row) && kind in row) ?? "exchange";
+    return (
+      faces.kinds.find((kind) => pointer.isObject(row) && kind in row) ??
+      "exchange"
+    );
   },
 
   /**
@@ -149,11 +169,16 @@ const faces = {
   addRow(base) {
     const rows = scenario.list(base);
     const last = rows.at(-1) ?? { insulated: true };
-    const { from_s: _, ...same } = pointer.isObject(last) ? last : {};
-    const row = { from_s: "", ...same };
+    const row = { ...(pointer.isObject(last) ? last : {}), from_s: "" };
     const at = Math.max(1, rows.length);
-    const change = () => scenario.set(base, rows.length === 0 ? [last, row] : [...rows, row]);
-    scenario.reshape("Row added", base, change, fields.id(pointer.join(base, at, "from_s")));
+    const change = () =>
+      scenario.set(base, rows.length === 0 ? [last, row] : [...rows, row]);
+    scenario.reshape(
+      "Row added",
+      base,
+      change,
+      fields.id(pointer.join(base, at, "from_s")),
+    );
   },
 
   /**

@@ -66,7 +66,8 @@ const fields = {
     const field = fields.add(box, path);
     if (box.dataset["optional"]) box.append(fields.leaveOut(field.label, path));
     if (field.control instanceof HTMLSelectElement) fields.bindChoice(field);
-    else if (box.dataset["kind"] === "text") fields.bindText(field, field.control);
+    else if (box.dataset["kind"] === "text")
+      fields.bindText(field, field.control);
     else fields.bindQuantity(field, field.control);
   },
 
@@ -79,7 +80,12 @@ const fields = {
    */
   offer(box, path, words, first) {
     const ask = () =>
-      scenario.reshape(words.replace("…", ""), path, () => scenario.set(path, first), fields.id(path));
+      scenario.reshape(
+        words.replace("…", ""),
+        path,
+        () => scenario.set(path, first),
+        fields.id(path),
+      );
     const button = dom.button(words, ask, "quiet");
     button.id = `${fields.id(path)}-ask`;
     box.classList.add("offer");
@@ -93,7 +99,12 @@ const fields = {
    */
   leaveOut(label, path) {
     const out = () =>
-      scenario.reshape(`${label} left out`, path, () => scenario.set(path, undefined), `${fields.id(path)}-ask`);
+      scenario.reshape(
+        `${label} left out`,
+        path,
+        () => scenario.set(path, undefined),
+        `${fields.id(path)}-ask`,
+      );
     const button = dom.button("×", out, "quiet out");
     button.setAttribute("aria-label", `Leave out: ${label}`);
     return button;
@@ -125,7 +136,14 @@ const fields = {
     label.after(understood);
     box.append(message);
     control.setAttribute("aria-describedby", `${understood.id} ${message.id}`);
-    const field = { path, box, control, message, trouble: "", label: dom.words(label) };
+    const field = {
+      path,
+      box,
+      control,
+      message,
+      trouble: "",
+      label: dom.words(label),
+    };
     fields.known.set(path, field);
     return field;
   },
@@ -139,7 +157,12 @@ const fields = {
     const value = scenario.get(path);
     control.value = String(value ?? box.dataset["default"] ?? "");
     control.addEventListener("change", () =>
-      scenario.reshape(label, path, () => scenario.set(path, control.value), control.id),
+      scenario.reshape(
+        label,
+        path,
+        () => scenario.set(path, control.value),
+        control.id,
+      ),
     );
   },
 
@@ -152,7 +175,11 @@ const fields = {
     const value = scenario.get(field.path);
     control.value = value === undefined ? "" : String(value);
     control.addEventListener("input", () =>
-      scenario.type(field.path, control.value === "" ? undefined : control.value, field.label),
+      scenario.type(
+        field.path,
+        control.value === "" ? undefined : control.value,
+        field.label,
+      ),
     );
   },
 
@@ -170,7 +197,8 @@ const fields = {
     control.addEventListener("keydown", (event) => {
       if (event instanceof KeyboardEvent) fields.stepKey(field, event);
     });
-    if (field.box.dataset["words"]) fields.offerWords(field, field.box.dataset["words"]);
+    if (field.box.dataset["words"])
+      fields.offerWords(field, field.box.dataset["words"]);
   },
 
   /**
@@ -182,8 +210,13 @@ const fields = {
     const raw = fields.raw(value);
     const typed = fields.typed.get(field.path);
     if (raw !== undefined) field.control.value = raw;
-    else if (typed !== undefined && pointer.same(typed.value, value)) field.control.value = typed.text;
-    else field.control.value = value === undefined ? "" : core.write(value, field.box.dataset["kind"] ?? "");
+    else if (typed !== undefined && pointer.same(typed.value, value))
+      field.control.value = typed.text;
+    else
+      field.control.value =
+        value === undefined
+          ? ""
+          : core.write(value, field.box.dataset["kind"] ?? "");
     fields.understand(field);
   },
 
@@ -194,7 +227,8 @@ const fields = {
    */
   raw(value) {
     if (typeof value === "string") return value;
-    if (pointer.isObject(value) && typeof value["at_s"] === "string") return value["at_s"];
+    if (pointer.isObject(value) && typeof value["at_s"] === "string")
+      return value["at_s"];
     return undefined;
   },
 
@@ -211,7 +245,9 @@ const fields = {
     if (reading !== null && "written" in reading) value = reading.written;
     // A table keeps what stands beside its points.
     if (pointer.isObject(old) && "at_s" in old) {
-      value = pointer.isObject(value) ? { ...old, ...value } : { ...old, at_s: value };
+      value = pointer.isObject(value)
+        ? { ...old, ...value }
+        : { ...old, at_s: value };
     }
     fields.typed.set(field.path, { text, value });
     fields.matchWords(field, value);
@@ -225,12 +261,19 @@ const fields = {
    */
   understand(field) {
     const text = field.control.value;
-    const reading = text.trim() === "" ? null : core.read(text, field.box.dataset["kind"] ?? "");
-    const understood = reading !== null && "understood" in reading ? reading.understood : "";
+    const reading =
+      text.trim() === ""
+        ? null
+        : core.read(text, field.box.dataset["kind"] ?? "");
+    const understood =
+      reading !== null && "understood" in reading ? reading.understood : "";
     const plain = (/** @type {string} */ words) => words.replace(/\s+/g, "");
     const differs = understood !== "" && plain(understood) !== plain(text);
-    dom.find(field.box, ".understood", HTMLElement).textContent = differs ? `= ${understood}` : "";
-    field.trouble = reading !== null && "message" in reading ? reading.message : "";
+    dom.find(field.box, ".understood", HTMLElement).textContent = differs
+      ? `= ${understood}`
+      : "";
+    field.trouble =
+      reading !== null && "message" in reading ? reading.message : "";
     return reading;
   },
 
@@ -244,7 +287,12 @@ const fields = {
     if (!up && event.key !== "ArrowDown" && event.key !== "PageDown") return;
     if (event.ctrlKey || event.metaKey || event.altKey) return;
     const large = event.shiftKey || event.key.startsWith("Page");
-    const stepped = core.step(field.control.value, field.box.dataset["kind"] ?? "", up, large);
+    const stepped = core.step(
+      field.control.value,
+      field.box.dataset["kind"] ?? "",
+      up,
+      large,
+    );
     if (stepped === undefined) return;
     event.preventDefault();
     field.control.value = stepped;
@@ -289,9 +337,13 @@ const fields = {
     const kind = field.box.dataset["words"];
     if (kind === undefined) return;
     const choices = core.choices(kind);
-    const at = choices.findIndex((choice) => pointer.same(choice.written, value));
-    dom.find(field.box, "select.words", HTMLSelectElement).value = at < 0 ? "" : String(at);
-    dom.find(field.box, ".source", HTMLElement).textContent = choices[at]?.source ?? "";
+    const at = choices.findIndex((choice) =>
+      pointer.same(choice.written, value),
+    );
+    dom.find(field.box, "select.words", HTMLSelectElement).value =
+      at < 0 ? "" : String(at);
+    dom.find(field.box, ".source", HTMLElement).textContent =
+      choices[at]?.source ?? "";
   },
 
   /**
@@ -300,14 +352,18 @@ const fields = {
    */
   report(problems) {
     for (const message of fields.groups.values()) message.textContent = "";
-    for (const field of fields.known.values()) fields.complain(field, field.trouble, false);
+    for (const field of fields.known.values())
+      fields.complain(field, field.trouble, false);
     for (const problem of problems) {
       if (problem.severity !== "error") continue;
       const place = fields.nearest(problem.path);
       const needed = problem.kind === "needed" || fields.isEmpty(problem.path);
-      const words = needed ? fields.wanted(problem) : `${problem.message}. ${problem.hint}`.trim();
+      const words = needed
+        ? fields.wanted(problem)
+        : `${problem.message}. ${problem.hint}`.trim();
       if (place.field !== undefined) {
-        if (place.field.trouble === "") fields.complain(place.field, words, needed);
+        if (place.field.trouble === "")
+          fields.complain(place.field, words, needed);
       } else if (place.group !== undefined) {
         place.group.textContent = words;
       }
@@ -322,7 +378,8 @@ const fields = {
   complain(field, words, needed) {
     field.message.textContent = words;
     field.message.classList.toggle("needed", needed);
-    if (words !== "" && !needed) field.control.setAttribute("aria-invalid", "true");
+    if (words !== "" && !needed)
+      field.control.setAttribute("aria-invalid", "true");
     else field.control.removeAttribute("aria-invalid");
     const more = field.box.closest("details");
     if (words !== "" && more !== null) more.open = true;
@@ -370,7 +427,9 @@ const fields = {
     const place = fields.nearest(path);
     if (place.field !== undefined) return place.field.control;
     const holder = place.group?.closest("fieldset, .row");
-    return holder === null || holder === undefined ? undefined : dom.all(holder, "input, select, button")[0];
+    return holder === null || holder === undefined
+      ? undefined
+      : dom.all(holder, "input, select, button")[0];
   },
 
   /**
@@ -382,7 +441,9 @@ const fields = {
     const place = fields.nearest(path);
     const holder = (place.field?.box ?? place.group)?.closest("fieldset");
     const whose = dom.words(holder?.querySelector("legend") ?? null);
-    return [whose, place.field?.label ?? ""].filter((words) => words !== "").join(": ");
+    return [whose, place.field?.label ?? ""]
+      .filter((words) => words !== "")
+      .join(": ");
   },
 
   /**

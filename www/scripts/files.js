@@ -18,11 +18,17 @@ const files = {
    */
   open(text, name) {
     const solution = core.solve(text);
-    const textual = (solution?.problems ?? []).filter(({ kind }) => kind === "text");
+    const textual = (solution?.problems ?? []).filter(
+      ({ kind }) => kind === "text",
+    );
     const tree = files.parse(text);
     if (textual.length > 0 || !pointer.isObject(tree)) {
-      const why = textual.map(({ message, hint }) => `${message}. ${hint}`.trim()).join(" ");
-      files.say(`${name} was not opened: ${why || "it is no scenario."} What was on the page is still there.`);
+      const why = textual
+        .map(({ message, hint }) => `${message}. ${hint}`.trim())
+        .join(" ");
+      files.say(
+        `${name} was not opened: ${why || "it is no scenario."} What was on the page is still there.`,
+      );
       return;
     }
     files.say("");
@@ -57,7 +63,9 @@ const files = {
     if (file === undefined) return;
     const most = core.ask((_, door) => door.most_bytes(), 0);
     if (file.size > most) {
-      files.say(`${file.name} was not opened: it has ${file.size} bytes; at most ${most} are taken.`);
+      files.say(
+        `${file.name} was not opened: it has ${file.size} bytes; at most ${most} are taken.`,
+      );
       return;
     }
     files.open(await file.text(), file.name);
@@ -77,7 +85,10 @@ const files = {
   /** @returns {string} the title, as far as it can be the name of a file */
   fileName() {
     const title = String(scenario.get("/title") ?? "");
-    const name = title.replace(/[^\p{L}\p{N}]+/gu, "-").replace(/^-+|-+$/g, "").slice(0, 60);
+    const name = title
+      .replace(/[^\p{L}\p{N}]+/gu, "-")
+      .replace(/^-+|-+$/g, "")
+      .slice(0, 60);
     return name === "" ? "scenario" : name.toLowerCase();
   },
 
@@ -110,7 +121,8 @@ const files = {
 
   /** @param {KeyboardEvent} event */
   key(event) {
-    if (!(event.ctrlKey || event.metaKey) || event.altKey || event.shiftKey) return;
+    if (!(event.ctrlKey || event.metaKey) || event.altKey || event.shiftKey)
+      return;
     const key = event.key.toLowerCase();
     if (key !== "s" && key !== "o") return;
     event.preventDefault();
@@ -139,7 +151,8 @@ const files = {
   /** A file may be dropped anywhere on the page. */
   listenToDrops() {
     const sign = dom.byId("drop", HTMLElement);
-    const carries = (/** @type {DragEvent} */ event) => event.dataTransfer?.types.includes("Files") ?? false;
+    const carries = (/** @type {DragEvent} */ event) =>
+      event.dataTransfer?.types.includes("Files") ?? false;
     window.addEventListener("dragover", (event) => {
       if (!carries(event)) return;
       event.preventDefault();

@@ -21,12 +21,14 @@ const form = {
     conditions.render();
     probes.render();
     for (const details of dom.all(form.element(), "details")) {
-      if (details instanceof HTMLDetailsElement) details.open = open.has(details.id);
+      if (details instanceof HTMLDetailsElement)
+        details.open = open.has(details.id);
     }
     const target = wanted === "" ? null : document.getElementById(wanted);
     const more = target?.closest("details");
     if (more) more.open = true;
-    if (target !== null && target !== document.activeElement) target.focus({ preventScroll: focus === undefined });
+    if (target !== null && target !== document.activeElement)
+      target.focus({ preventScroll: focus === undefined });
   },
 
   /** @returns {HTMLElement} */
@@ -36,7 +38,9 @@ const form = {
 
   /** @returns {Set<string>} */
   openDetails() {
-    return new Set(dom.all(form.element(), "details[open]").map((details) => details.id));
+    return new Set(
+      dom.all(form.element(), "details[open]").map((details) => details.id),
+    );
   },
 
   /**
@@ -45,8 +49,14 @@ const form = {
    * @param {string} b
    */
   swapOpen(a, b) {
-    const [one, other] = [a, b].map((path) => document.getElementById(`more${path}`));
-    if (!(one instanceof HTMLDetailsElement) || !(other instanceof HTMLDetailsElement)) return;
+    const [one, other] = [a, b].map((path) =>
+      document.getElementById(`more${path}`),
+    );
+    if (
+      !(one instanceof HTMLDetailsElement) ||
+      !(other instanceof HTMLDetailsElement)
+    )
+      return;
     [one.open, other.open] = [other.open, one.open];
   },
 
@@ -63,7 +73,8 @@ const form = {
       box.classList.remove("offer");
       box.replaceChildren(first.cloneNode(true));
     }
-    for (const message of dom.all(document, ".message[data-message]")) message.removeAttribute("id");
+    for (const message of dom.all(document, ".message[data-message]"))
+      message.removeAttribute("id");
     fields.bind(document, "");
   },
 

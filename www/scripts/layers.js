@@ -3,14 +3,21 @@
 /** The layers of the item, from the inside out. */
 const layers = {
   path: "/item/layers",
-  properties: ["density_kg_per_m3", "heat_capacity_j_per_kg_k", "conductivity_w_per_m_k"],
+  properties: [
+    "density_kg_per_m3",
+    "heat_capacity_j_per_kg_k",
+    "conductivity_w_per_m_k",
+  ],
 
   render() {
     const list = scenario.list(layers.path);
-    dom.byId("layers", HTMLElement).replaceChildren(...list.map((_, i) => layers.block(i, list.length)));
+    dom
+      .byId("layers", HTMLElement)
+      .replaceChildren(...list.map((_, i) => layers.block(i, list.length)));
     const solid = !layers.isHollow();
     const shape = scenario.get("/item/shape");
-    dom.byId("hollow", HTMLElement).hidden = shape === "slab" && scenario.get("/item/inner_radius_m") === undefined;
+    dom.byId("hollow", HTMLElement).hidden =
+      shape === "slab" && scenario.get("/item/inner_radius_m") === undefined;
     dom.byId("order", HTMLElement).textContent =
       solid && list.length > 0
         ? "From the inside out; the thickness of the first is its radius."
@@ -26,7 +33,10 @@ const layers = {
 
   /** @returns {string[]} what the layers are called, from the inside out */
   names() {
-    return core.ask((_, door) => door.layer_names(JSON.stringify(scenario.list(layers.path))), []);
+    return core.ask(
+      (_, door) => door.layer_names(JSON.stringify(scenario.list(layers.path))),
+      [],
+    );
   },
 
   /**
@@ -37,17 +47,43 @@ const layers = {
   block(i, count) {
     const base = pointer.join(layers.path, i);
     const block = dom.copy("layer-template");
-    const name = layers.names()[i] ?? "";
-    dom.find(block, "legend", HTMLElement).textContent = `${i + 1} ${name}`;
     const material = layers.bindMaterial(block, base);
     layers.keepWanted(block, base, i, material);
     fields.bind(block, base);
     layers.collectOffers(block);
     layers.bindMoves(block, i, count);
-    dom.find(block, ".more .source", HTMLElement).textContent = layers.about(material);
-    const more = dom.find(block, ".more", HTMLDetailsElement);
-    more.id = `more${base}`;
+    dom.find(block, ".more .source", HTMLElement).textContent =
+      layers.about(material);
+    dom.find(block, ".more", HTMLElement).id = `more${base}`;
+    layers.bindName(block, i);
     return block;
+  },
+
+  /**
+   * A layer is called by its name at once, and conditions go on speaking of it.
+   * @param {DocumentFragment} block
+   * @param {number} i
+   */
+  bindName(block, i) {
+    const legend = dom.find(block, "legend", HTMLElement);
+    const summary = dom.find(block, "summary", HTMLElement);
+    const path = pointer.join(layers.path, i, "name");
+    const show = () => {
+      const number = dom.make("span", "Layer ", "unseen");
+      const name = dom.make("span", `: ${layers.names()[i] ?? ""}`, "unseen");
+      legend.replaceChildren(number, String(i + 1), name);
+      summary.textContent = String(scenario.get(path) ?? "") || "More";
+    };
+    let name = layers.names()[i];
+    show();
+    fields.known.get(path)?.control.addEventListener("input", () => {
+      const now = layers.names()[i] ?? "";
+      conditions.rename(new Map([[name, now]]));
+      name = now;
+      show();
+      start.render();
+      conditions.render();
+    });
   },
 
   /**
@@ -55,7 +91,9 @@ const layers = {
    * @returns {string} where its properties come from
    */
   about(material) {
-    return material === undefined ? "" : `Properties: ${material.source}. ${material.notes}`.trim();
+    return material === undefined
+      ? ""
+      : `Properties: ${material.source}. ${material.notes}`.trim();
   },
 
   /**
@@ -65,7 +103,10 @@ const layers = {
    */
   bindMaterial(block, base) {
     const path = pointer.join(base, "material");
-    const field = fields.add(dom.find(block, '[data-kind="material"]', HTMLElement), path);
+    const field = fields.add(
+      dom.find(block, '[data-kind="material"]', HTMLElement),
+      path,
+    );
     const select = dom.find(field.box, "select", HTMLSelectElement);
     /** @type {Map<string, HTMLOptGroupElement>} */
     const groups = new Map();
@@ -90,7 +131,9 @@ const layers = {
   choose(base, id) {
     const path = pointer.join(base, "material");
     const change = () => {
-      const liquid = core.materials().find((material) => material.id === id)?.liquid ?? false;
+      const liquid =
+        core.materials().find((material) => material.id === id)?.liquid ??
+        false;
       scenario.set(path, id === "" ? undefined : id);
       for (const key of layers.properties) {
         const at = pointer.join(base, key);
@@ -120,7 +163,8 @@ const layers = {
       const after = layers.names();
       /** @type {Map<Json | undefined, string>} */
       const renamed = new Map();
-      for (const [i, name] of before.entries()) renamed.set(name, after[moved(i)] ?? name);
+      for (const [i, name] of before.entries())
+        renamed.set(name, after[moved(i)] ?? name);
       conditions.rename(renamed);
     };
     scenario.reshape(label, path, follow, focus);
@@ -134,17 +178,26 @@ const layers = {
    * @param {Material | undefined} material
    */
   keepWanted(block, base, i, material) {
-    const has = (/** @type {string} */ key) => scenario.get(pointer.join(base, key)) !== undefined;
-    const drop = (/** @type {string} */ selector) => dom.find(block, selector, HTMLElement).remove();
+    const has = (/** @type {string} */ key) =>
+      scenario.get(pointer.join(base, key)) !== undefined;
+    const drop = (/** @type {string} */ selector) =>
+      dom.find(block, selector, HTMLElement).remove();
     const own = layers.properties.some(has);
     if (!own) drop(".properties-note");
     if (!has("material")) {
-      for (const key of layers.properties) delete dom.find(block, `[data-at="${key}"]`, HTMLElement).dataset["optional"];
+      for (const key of layers.properties)
+        delete dom.find(block, `[data-at="${key}"]`, HTMLElement).dataset[
+          "optional"
+        ];
     }
-    const moves = has("motion") && scenario.get(pointer.join(base, "motion")) !== "still";
-    if (!has("motion") && material !== undefined && !material.liquid) drop('[data-at="motion"]');
-    if (!moves && !has("inside_film_w_per_m2_k")) drop('[data-at="inside_film_w_per_m2_k"]');
-    if (i === 0 && !has("contact_m2_k_per_w")) drop('[data-at="contact_m2_k_per_w"]');
+    const moves =
+      has("motion") && scenario.get(pointer.join(base, "motion")) !== "still";
+    if (!has("motion") && material !== undefined && !material.liquid)
+      drop('[data-at="motion"]');
+    if (!moves && !has("inside_film_w_per_m2_k"))
+      drop('[data-at="inside_film_w_per_m2_k"]');
+    if (i === 0 && !has("contact_m2_k_per_w"))
+      drop('[data-at="contact_m2_k_per_w"]');
   },
 
   /**
@@ -188,17 +241,30 @@ const layers = {
       scenario.set(layers.path, list);
     };
     const end = to === 0 || to === scenario.list(layers.path).length - 1;
-    const way = (to < from) !== end ? "in" : "out";
-    const swapped = (/** @type {number} */ i) => (i === from ? to : i === to ? from : i);
-    form.swapOpen(pointer.join(layers.path, from), pointer.join(layers.path, to));
-    layers.reshape("Layer moved", layers.path, change, `${way}${pointer.join(layers.path, to)}`, swapped);
+    const way = to < from !== end ? "in" : "out";
+    const swapped = (/** @type {number} */ i) =>
+      i === from ? to : i === to ? from : i;
+    form.swapOpen(
+      pointer.join(layers.path, from),
+      pointer.join(layers.path, to),
+    );
+    layers.reshape(
+      "Layer moved",
+      layers.path,
+      change,
+      `${way}${pointer.join(layers.path, to)}`,
+      swapped,
+    );
   },
 
   /** @param {number} i */
   remove(i) {
     const left = scenario.list(layers.path).length - 1;
-    const focus = fields.id(pointer.join(layers.path, Math.min(i, left - 1), "material"));
-    const moved = (/** @type {number} */ was) => (was === i ? -1 : was > i ? was - 1 : was);
+    const focus = fields.id(
+      pointer.join(layers.path, Math.min(i, left - 1), "material"),
+    );
+    const moved = (/** @type {number} */ was) =>
+      was === i ? -1 : was > i ? was - 1 : was;
     const change = () => scenario.set(pointer.join(layers.path, i), undefined);
     layers.reshape("Layer removed", layers.path, change, focus, moved);
   },
@@ -207,16 +273,27 @@ const layers = {
   insert(i) {
     const change = () => {
       const list = [...scenario.list(layers.path)];
-      list.splice(i, 0, { material: core.materials()[0]?.id ?? "", thickness_m: "" });
+      list.splice(i, 0, {
+        material: core.materials()[0]?.id ?? "",
+        thickness_m: "",
+      });
       scenario.set(layers.path, list);
     };
     const moved = (/** @type {number} */ was) => (was >= i ? was + 1 : was);
-    layers.reshape("Layer added", layers.path, change, fields.id(pointer.join(layers.path, i, "material")), moved);
+    layers.reshape(
+      "Layer added",
+      layers.path,
+      change,
+      fields.id(pointer.join(layers.path, i, "material")),
+      moved,
+    );
   },
 
   listen() {
-    dom.byId("add-layer", HTMLButtonElement).addEventListener("click", () =>
-      layers.insert(scenario.list(layers.path).length),
-    );
+    dom
+      .byId("add-layer", HTMLButtonElement)
+      .addEventListener("click", () =>
+        layers.insert(scenario.list(layers.path).length),
+      );
   },
 };

@@ -15,8 +15,20 @@ const main = {
   },
 
   listen() {
-    for (const part of [undo, layers, start, probes, conditions, pictures, schedule, files]) part.listen();
-    dom.byId("description", HTMLFormElement).addEventListener("submit", (event) => event.preventDefault());
+    for (const part of [
+      undo,
+      layers,
+      start,
+      probes,
+      conditions,
+      pictures,
+      schedule,
+      files,
+    ])
+      part.listen();
+    dom
+      .byId("description", HTMLFormElement)
+      .addEventListener("submit", (event) => event.preventDefault());
     const system = dom.byId("system", HTMLSelectElement);
     system.value = store.system;
     system.addEventListener("change", () => {

@@ -7,7 +7,13 @@ const overTime = {
     temperature: {
       kind: "temperature",
       swing: "temperature_difference",
-      keys: { from: "from_c", to: "to_c", values: "values_c", mean: "mean_c", amplitude: "amplitude_k" },
+      keys: {
+        from: "from_c",
+        to: "to_c",
+        values: "values_c",
+        mean: "mean_c",
+        amplitude: "amplitude_k",
+      },
       example: "0 h: 18 °C; 6 h: 12 °C; 12 h: 20 °C",
     },
     flux: {
@@ -55,15 +61,24 @@ const overTime = {
     }
     const how = overTime.how(value);
     const parts = dom.copy(`${how}-template`);
-    for (const part of dom.all(parts, ".field")) overTime.fill(part, family, how, name);
+    for (const part of dom.all(parts, ".field"))
+      overTime.fill(part, family, how, name);
     const example = parts.querySelector(".table-example");
     if (example !== null) example.textContent = family.example;
     box.replaceChildren(parts);
     fields.bind(box, path);
     const chooser = overTime.chooser(path, name, how, family);
-    if (how === "steady") box.append(chooser);
-    else box.prepend(chooser);
-    if (box.dataset["optional"]) box.firstElementChild?.append(fields.leaveOut(name, path));
+    if (how === "steady") {
+      const tail = dom.make("div", "", "tail");
+      tail.append(...chooser.children);
+      dom.find(box, ".field", HTMLElement).append(tail);
+    } else {
+      box.prepend(chooser);
+    }
+    if (box.dataset["optional"]) {
+      const out = fields.leaveOut(name, path);
+      dom.find(box, ".tail, .field", HTMLElement).append(out);
+    }
   },
 
   /**
@@ -79,7 +94,8 @@ const overTime = {
     if (kind === "value" || kind === "") part.dataset["kind"] = family.kind;
     if (kind === "swing") part.dataset["kind"] = family.swing;
     if (kind === "table") part.dataset["kind"] = `${family.kind}-table`;
-    if (how === "steady") dom.find(part, "label", HTMLElement).textContent = name;
+    if (how === "steady")
+      dom.find(part, "label", HTMLElement).textContent = name;
   },
 
   /**
@@ -88,7 +104,7 @@ const overTime = {
    * @param {string} name
    * @param {string} how
    * @param {{ keys: Record<string, string> }} family
-   * @returns {Node}
+   * @returns {HTMLElement}
    */
   chooser(path, name, how, family) {
     const made = dom.copy("over-time-template");
@@ -97,13 +113,17 @@ const overTime = {
     select.id = `how${path}`;
     label.htmlFor = select.id;
     label.textContent = how === "steady" ? `${name}, over time` : name;
-    dom.find(made, ".over", HTMLElement).classList.toggle("steady", how === "steady");
+    label.classList.toggle("unseen", how === "steady");
     select.value = how;
     select.addEventListener("change", () =>
       scenario.reshape(
         `${name}: ${dom.words(select.selectedOptions[0] ?? null)}`,
         path,
-        () => scenario.set(path, overTime.changed(scenario.get(path), select.value, family.keys)),
+        () =>
+          scenario.set(
+            path,
+            overTime.changed(scenario.get(path), select.value, family.keys),
+          ),
         select.id,
       ),
     );
@@ -126,7 +146,12 @@ const overTime = {
       case "table":
         return { at_s: "", [name("values")]: [] };
       case "cycle":
-        return { [name("mean")]: known, [name("amplitude")]: "", period_s: overTime.day, highest_at_s: "" };
+        return {
+          [name("mean")]: known,
+          [name("amplitude")]: "",
+          period_s: overTime.day,
+          highest_at_s: "",
+        };
       default:
         return known;
     }
@@ -142,6 +167,10 @@ const overTime = {
     if (!pointer.isObject(old)) return old ?? "";
     if ("value" in old) return old["value"] ?? "";
     const values = old[keys["values"] ?? ""];
-    return old[keys["from"] ?? ""] ?? old[keys["mean"] ?? ""] ?? (Array.isArray(values) ? (values[0] ?? "") : "");
+    return (
+      old[keys["from"] ?? ""] ??
+      old[keys["mean"] ?? ""] ??
+      (Array.isArray(values) ? (values[0] ?? "") : "")
+    );
   },
 };

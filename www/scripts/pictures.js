@@ -32,7 +32,9 @@ const pictures = {
   /** @param {Report} report */
   show(report) {
     pictures.end = report.course.end_s;
-    pictures.time = pictures.follows ? pictures.telling(report) : Math.min(pictures.time, pictures.end);
+    pictures.time = pictures.follows
+      ? pictures.telling(report)
+      : Math.min(pictures.time, pictures.end);
     pictures.showJumps(report);
     pictures.move(pictures.time);
   },
@@ -43,8 +45,14 @@ const pictures = {
    * @returns {number}
    */
   telling(report) {
-    const all = [report.ready, report.standing, ...[...report.ready_when, ...report.must_not].map((one) => one.outcome)];
-    for (const outcome of all) if (outcome?.kind === "at") return Math.min(outcome.time_s, report.course.end_s);
+    const all = [
+      report.ready,
+      report.standing,
+      ...[...report.ready_when, ...report.must_not].map((one) => one.outcome),
+    ];
+    for (const outcome of all)
+      if (outcome?.kind === "at")
+        return Math.min(outcome.time_s, report.course.end_s);
     return report.course.end_s;
   },
 
@@ -52,14 +60,20 @@ const pictures = {
   showJumps(report) {
     /** @type {[string, number][]} */
     const places = [["The stop", 0]];
-    if (report.ready?.kind === "at") places.push(["Ready", report.ready.time_s]);
-    if (report.standing?.kind === "at") places.push(["Limit reached", report.standing.time_s]);
+    if (report.ready?.kind === "at")
+      places.push(["Ready", report.ready.time_s]);
+    if (report.standing?.kind === "at")
+      places.push(["Limit reached", report.standing.time_s]);
     places.push(["The end", pictures.end]);
     const jump = (/** @type {[string, number]} */ [words, time]) =>
-      dom.button(words, () => {
-        pictures.follows = false;
-        pictures.move(time);
-      }, "quiet");
+      dom.button(
+        words,
+        () => {
+          pictures.follows = false;
+          pictures.move(time);
+        },
+        "quiet",
+      );
     dom.byId("jumps", HTMLElement).replaceChildren(...places.map(jump));
   },
 
@@ -69,9 +83,14 @@ const pictures = {
    */
   move(time) {
     pictures.time = Math.min(Math.max(time, 0), pictures.end);
-    const moment = core.ask((page) => page.moment(pictures.time), null) ?? { words: "", iso: "" };
+    const moment = core.ask((page) => page.moment(pictures.time), null) ?? {
+      words: "",
+      iso: "",
+    };
     const slider = dom.byId("time", HTMLInputElement);
-    slider.value = String(pictures.end > 0 ? (pictures.time / pictures.end) * pictures.steps : 0);
+    slider.value = String(
+      pictures.end > 0 ? (pictures.time / pictures.end) * pictures.steps : 0,
+    );
     slider.setAttribute("aria-valuetext", moment.words);
     const words = dom.make("time", moment.words);
     if (moment.iso) words.dateTime = moment.iso;
@@ -88,7 +107,8 @@ const pictures = {
       pictures.showTable(figure, name);
     }
     const sketch = dom.byId("sketch", HTMLCanvasElement);
-    if (sketch.clientWidth > 0 && !pictures.printing) pictures.drawOn(sketch, "section");
+    if (sketch.clientWidth > 0 && !pictures.printing)
+      pictures.drawOn(sketch, "section");
   },
 
   /**
@@ -107,20 +127,33 @@ const pictures = {
     const [paperWidth, paperHeight] = pictures.paper[name];
     const width = pictures.printing ? paperWidth : canvas.clientWidth;
     const height = pictures.printing ? paperHeight : canvas.clientHeight;
-    const ratio = pictures.printing ? pictures.paperRatio : window.devicePixelRatio;
+    const ratio = pictures.printing
+      ? pictures.paperRatio
+      : window.devicePixelRatio;
     const context = canvas.getContext("2d");
     if (width === 0 || height === 0 || context === null) return;
     canvas.width = Math.round(width * ratio);
     canvas.height = Math.round(height * ratio);
     const draw = (/** @type {Page} */ page) =>
-      page.draw(name, context, width, height, ratio, pictures.time, pictures.theme(), store.system);
+      page.draw(
+        name,
+        context,
+        width,
+        height,
+        ratio,
+        pictures.time,
+        pictures.theme(),
+        store.system,
+      );
     core.ask(draw, undefined);
   },
 
   /** @returns {Theme} */
   theme() {
     if (pictures.printing) return "print";
-    return matchMedia("(prefers-color-scheme: dark)").matches ? "dark" : "light";
+    return matchMedia("(prefers-color-scheme: dark)").matches
+      ? "dark"
+      : "light";
   },
 
   /**
@@ -131,11 +164,19 @@ const pictures = {
   showTable(figure, name) {
     /** @type {NumberTable} */
     const empty = { caption: "", columns: [], rows: [] };
-    const { caption, columns, rows } = core.ask((page) => page.table(name, pictures.time, store.system), null) ?? empty;
-    dom.find(figure, "canvas", HTMLCanvasElement).setAttribute("aria-label", caption);
+    const { caption, columns, rows } =
+      core.ask((page) => page.table(name, pictures.time, store.system), null) ??
+      empty;
+    dom
+      .find(figure, "canvas", HTMLCanvasElement)
+      .setAttribute("aria-label", caption);
     if (!dom.find(figure, "details", HTMLDetailsElement).open) return;
     const head = dom.make("tr");
-    head.append(...columns.map((words) => Object.assign(dom.make("th", words), { scope: "col" })));
+    head.append(
+      ...columns.map((words) =>
+        Object.assign(dom.make("th", words), { scope: "col" }),
+      ),
+    );
     const body = rows.map((cells) => {
       const row = dom.make("tr");
       row.append(...cells.map((words) => dom.make("td", words)));
@@ -163,7 +204,11 @@ const pictures = {
   print(onPaper) {
     pictures.printing = onPaper;
     for (const name of pictures.names) {
-      const { style } = dom.find(pictures.figure(name), "canvas", HTMLCanvasElement);
+      const { style } = dom.find(
+        pictures.figure(name),
+        "canvas",
+        HTMLCanvasElement,
+      );
       const [width, height] = pictures.paper[name];
       style.width = onPaper ? `${width}px` : "";
       style.height = onPaper ? `${height}px` : "";
@@ -182,9 +227,13 @@ const pictures = {
     for (const name of pictures.names) {
       const figure = pictures.figure(name);
       sizes.observe(dom.find(figure, "canvas", HTMLCanvasElement));
-      dom.find(figure, "details", HTMLDetailsElement).addEventListener("toggle", () => pictures.showTable(figure, name));
+      dom
+        .find(figure, "details", HTMLDetailsElement)
+        .addEventListener("toggle", () => pictures.showTable(figure, name));
     }
-    matchMedia("(prefers-color-scheme: dark)").addEventListener("change", () => pictures.draw());
+    matchMedia("(prefers-color-scheme: dark)").addEventListener("change", () =>
+      pictures.draw(),
+    );
     window.addEventListener("beforeprint", () => pictures.print(true));
     window.addEventListener("afterprint", () => pictures.print(false));
     pictures.watchRatio();

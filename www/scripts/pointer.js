@@ -21,7 +21,8 @@ const pointer = {
    */
   join(path, ...keys) {
     return keys.reduce(
-      (/** @type {string} */ sum, key) => `${sum}/${String(key).replaceAll("~", "~0").replaceAll("/", "~1")}`,
+      (/** @type {string} */ sum, key) =>
+        `${sum}/${String(key).replaceAll("~", "~0").replaceAll("/", "~1")}`,
       path,
     );
   },
@@ -93,9 +94,14 @@ const pointer = {
     if (key === undefined) return value ?? null;
     if (Array.isArray(tree)) {
       const at = Number(key);
-      if (rest.length > 0) return tree.map((old, i) => (i === at ? pointer.replace(old, rest, value) : old));
+      if (rest.length > 0)
+        return tree.map((old, i) =>
+          i === at ? pointer.replace(old, rest, value) : old,
+        );
       if (value === undefined) return tree.filter((_, i) => i !== at);
-      return at < tree.length ? tree.map((old, i) => (i === at ? value : old)) : [...tree, value];
+      return at < tree.length
+        ? tree.map((old, i) => (i === at ? value : old))
+        : [...tree, value];
     }
     const old = pointer.isObject(tree) ? tree : {};
     if (rest.length > 0) {
@@ -103,7 +109,9 @@ const pointer = {
       return { ...old, [key]: pointer.replace(old[key], rest, value) };
     }
     if (value !== undefined) return { ...old, [key]: value };
-    return Object.fromEntries(Object.entries(old).filter(([name]) => name !== key));
+    return Object.fromEntries(
+      Object.entries(old).filter(([name]) => name !== key),
+    );
   },
 
   /**

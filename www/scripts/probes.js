@@ -6,12 +6,18 @@ const probes = {
 
   render() {
     const list = scenario.list(probes.path);
-    dom.byId("probes", HTMLElement).replaceChildren(...list.map((_, i) => probes.block(i)));
+    dom
+      .byId("probes", HTMLElement)
+      .replaceChildren(...list.map((_, i) => probes.block(i)));
   },
 
   /** @returns {string[]} */
   names() {
-    return scenario.list(probes.path).map((probe) => (pointer.isObject(probe) ? String(probe["name"] ?? "") : ""));
+    return scenario
+      .list(probes.path)
+      .map((probe) =>
+        pointer.isObject(probe) ? String(probe["name"] ?? "") : "",
+      );
   },
 
   /**
@@ -21,14 +27,21 @@ const probes = {
   block(i) {
     const base = pointer.join(probes.path, i);
     const made = dom.copy("probe-template");
-    const name = probes.names()[i] ?? "";
-    dom.find(made, "legend", HTMLElement).textContent = name === "" ? `Watched place ${i + 1}` : name;
-    const side = scenario.get(pointer.join(base, "from_outside_m")) === undefined ? "from_inside_m" : "from_outside_m";
+    const side =
+      scenario.get(pointer.join(base, "from_outside_m")) === undefined
+        ? "from_inside_m"
+        : "from_outside_m";
     dom.find(made, '[data-kind="length"]', HTMLElement).dataset["at"] = side;
-    probes.bindSide(dom.find(made, '[data-kind="side"]', HTMLElement), base, side);
+    probes.bindSide(
+      dom.find(made, '[data-kind="side"]', HTMLElement),
+      base,
+      side,
+    );
     fields.bind(made, base);
-    probes.bindName(pointer.join(base, "name"));
-    dom.find(made, "[data-remove]", HTMLButtonElement).addEventListener("click", () => probes.remove(i));
+    probes.bindName(made, i);
+    dom
+      .find(made, "[data-remove]", HTMLButtonElement)
+      .addEventListener("click", () => probes.remove(i));
     return made;
   },
 
@@ -43,27 +56,35 @@ const probes = {
     dom.find(box, "label", HTMLLabelElement).htmlFor = select.id;
     select.value = side;
     const change = () => {
-      const { [side]: distance, ...rest } = /** @type {JsonObject} */ (scenario.get(base));
+      const { [side]: distance, ...rest } = /** @type {JsonObject} */ (
+        scenario.get(base)
+      );
       scenario.set(base, { ...rest, [select.value]: distance ?? "" });
     };
-    select.addEventListener("change", () => scenario.reshape("Measured from", base, change, select.id));
+    select.addEventListener("change", () =>
+      scenario.reshape("Measured from", base, change, select.id),
+    );
   },
 
   /**
-   * Conditions go on speaking of the same place when it is called something else.
-   * @param {string} path
+   * A place is called by its name at once, and conditions go on speaking of it.
+   * @param {DocumentFragment} made
+   * @param {number} i
    */
-  bindName(path) {
-    const control = fields.known.get(path)?.control;
+  bindName(made, i) {
+    const path = pointer.join(probes.path, i, "name");
+    const legend = dom.find(made, "legend", HTMLElement);
+    const show = () => {
+      legend.textContent = probes.names()[i] || `Watched place ${i + 1}`;
+    };
     let name = scenario.get(path);
-    control?.addEventListener("change", () => {
-      const now = scenario.get(path) ?? "";
-      if (conditions.speakOf("probe", name)) {
-        scenario.reshape("Name", path, () => conditions.rename(new Map([[name, String(now)]]), "probe"), control.id);
-      } else {
-        form.render(control.id);
-      }
+    show();
+    fields.known.get(path)?.control.addEventListener("input", () => {
+      const now = probes.names()[i] ?? "";
+      conditions.rename(new Map([[name, now]]), "probe");
       name = now;
+      show();
+      conditions.render();
     });
   },
 
@@ -79,7 +100,10 @@ const probes = {
   /** Inside a change: one more, and its name. */
   append() {
     const name = probes.freeName();
-    scenario.set(probes.path, [...scenario.list(probes.path), { name, from_inside_m: "" }]);
+    scenario.set(probes.path, [
+      ...scenario.list(probes.path),
+      { name, from_inside_m: "" },
+    ]);
     return name;
   },
 
@@ -96,7 +120,12 @@ const probes = {
     dom.byId("add-probe", HTMLButtonElement).addEventListener("click", () => {
       const at = scenario.list(probes.path).length;
       const focus = fields.id(pointer.join(probes.path, at, "from_inside_m"));
-      scenario.reshape("Watched place added", probes.path, probes.append, focus);
+      scenario.reshape(
+        "Watched place added",
+        probes.path,
+        probes.append,
+        focus,
+      );
     });
   },
 };

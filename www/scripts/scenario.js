@@ -74,7 +74,9 @@ const scenario = {
   set(path, value) {
     scenario.opened = null;
     scenario.tree =
-      value === undefined ? pointer.remove(scenario.tree, path) : pointer.put(scenario.tree, path, value);
+      value === undefined
+        ? pointer.remove(scenario.tree, path)
+        : pointer.put(scenario.tree, path, value);
   },
 
   /**

@@ -12,7 +12,8 @@ const schedule = {
 
   /** Something changed; the answer comes in the same frame. */
   request() {
-    if (schedule.frame === 0) schedule.frame = requestAnimationFrame(schedule.answer);
+    if (schedule.frame === 0)
+      schedule.frame = requestAnimationFrame(schedule.answer);
     clearTimeout(schedule.keeping);
     schedule.keeping = setTimeout(store.keep, schedule.rest);
   },

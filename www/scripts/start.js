@@ -16,7 +16,11 @@ const start = {
   /** @returns {string} */
   kind() {
     const written = scenario.get(start.path);
-    return start.kinds.find((kind) => pointer.isObject(written) && kind in written) ?? "uniform_c";
+    return (
+      start.kinds.find(
+        (kind) => pointer.isObject(written) && kind in written,
+      ) ?? "uniform_c"
+    );
   },
 
   /**
@@ -42,8 +46,10 @@ const start = {
     const given = scenario.list("/start/per_layer_c").length;
     return Array.from({ length: Math.max(names.length, given) }, (_, i) => {
       const made = dom.copy("start-layer-template");
-      dom.find(made, ".field", HTMLElement).dataset["at"] = `start/per_layer_c/${i}`;
-      dom.find(made, "label", HTMLElement).textContent = `${i + 1} ${names[i] ?? "no such layer"}`;
+      dom.find(made, ".field", HTMLElement).dataset["at"] =
+        `start/per_layer_c/${i}`;
+      dom.find(made, "label", HTMLElement).textContent =
+        `${i + 1} ${names[i] ?? "no such layer"}`;
       return made;
     });
   },
@@ -51,10 +57,14 @@ const start = {
   /** @returns {Node[]} what it was kept at, and what its faces saw */
   steadyBefore() {
     const base = "/start/steady_before";
-    const made = [dom.copy("start-steady-template"), start.before(`${base}/outer`, "Around it before the stop")];
+    const made = [
+      dom.copy("start-steady-template"),
+      start.before(`${base}/outer`, "Around it before the stop"),
+    ];
     const inner = scenario.get(`${base}/inner`) !== undefined;
     const kept = scenario.get(`${base}/contents_c`) !== undefined;
-    if (inner || (layers.isHollow() && !kept)) made.push(start.before(`${base}/inner`, "Inside it before the stop"));
+    if (inner || (layers.isHollow() && !kept))
+      made.push(start.before(`${base}/inner`, "Inside it before the stop"));
     return made;
   },
 
@@ -76,7 +86,12 @@ const start = {
   choose(kind) {
     const select = dom.byId("start-kind", HTMLSelectElement);
     const change = () => scenario.set(start.path, start.changed(kind));
-    scenario.reshape(`It starts ${dom.words(select.selectedOptions[0] ?? null)}`, start.path, change, select.id);
+    scenario.reshape(
+      `It starts ${dom.words(select.selectedOptions[0] ?? null)}`,
+      start.path,
+      change,
+      select.id,
+    );
   },
 
   /**
@@ -97,7 +112,9 @@ const start = {
       case "profile":
         return { profile: "" };
       case "steady_before": {
-        const outer = scenario.get("/surroundings/outer/0") ?? { insulated: true };
+        const outer = scenario.get("/surroundings/outer/0") ?? {
+          insulated: true,
+        };
         return { steady_before: { contents_c: known, outer } };
       }
       default:

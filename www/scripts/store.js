@@ -21,7 +21,10 @@ const store = {
   /** Keeps the scenario with everything that is typed, readable or not. */
   keep() {
     try {
-      localStorage.setItem(store.key, JSON.stringify({ text: scenario.text(), system: store.system }));
+      localStorage.setItem(
+        store.key,
+        JSON.stringify({ text: scenario.text(), system: store.system }),
+      );
     } catch {
       // Not allowed here, or full: the page works without it.
     }

@@ -30,11 +30,22 @@ const undo = {
     const now = performance.now();
     const last = undo.past.at(-1);
     undo.future = [];
-    if (typing && last !== undefined && last.path === path && now - last.at < undo.pause) {
+    if (
+      typing &&
+      last !== undefined &&
+      last.path === path &&
+      now - last.at < undo.pause
+    ) {
       last.at = now;
     } else {
       const { tree, opened } = scenario;
-      undo.past.push({ tree, opened, path, label, at: typing ? now : -Infinity });
+      undo.past.push({
+        tree,
+        opened,
+        path,
+        label,
+        at: typing ? now : -Infinity,
+      });
       if (undo.past.length > undo.most) undo.past.shift();
     }
     undo.show();
@@ -79,7 +90,8 @@ const undo = {
   key(event) {
     if (!(event.ctrlKey || event.metaKey) || event.altKey) return;
     const key = event.key.toLowerCase();
-    const forth = (key === "z" && event.shiftKey) || (key === "y" && !event.shiftKey);
+    const forth =
+      (key === "z" && event.shiftKey) || (key === "y" && !event.shiftKey);
     const back = key === "z" && !event.shiftKey;
     if (!back && !forth) return;
     event.preventDefault();
@@ -92,7 +104,8 @@ const undo = {
    * @param {InputEvent} event
    */
   menu(event) {
-    if (event.inputType !== "historyUndo" && event.inputType !== "historyRedo") return;
+    if (event.inputType !== "historyUndo" && event.inputType !== "historyRedo")
+      return;
     event.preventDefault();
     if (event.inputType === "historyUndo") undo.back();
     else undo.forth();
