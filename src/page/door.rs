@@ -6,7 +6,7 @@ use crate::answer::Report;
 use crate::film::choices;
 use crate::item::layer_name;
 use crate::matter::library::{self, Phase};
-use crate::picture::{self, Shown, Theme};
+use crate::picture::{self, Colour, Shown, Theme};
 use crate::problem::{Problem, Severity, Trouble};
 use crate::scenario::{self, Number, limits};
 use crate::units::quantity::System;
@@ -123,9 +123,13 @@ impl Page {
         system_word: &str,
     ) {
         let Some(solved) = &self.solved else { return };
-        let theme = if theme == "dark" { Theme::Dark } else { Theme::Light };
+        let (theme, paper) = match theme {
+            "dark" => (Theme::Dark, Theme::Dark.inks().paper),
+            "print" => (Theme::Light, Colour(255, 255, 255)),
+            _ => (Theme::Light, Theme::Light.inks().paper),
+        };
         let shown = Shown::new(solved, system(system_word));
-        let mut canvas = Canvas::new(context, ratio, (width, height), theme.inks().paper);
+        let mut canvas = Canvas::new(context, ratio, (width, height), paper);
         picture::draw(&mut canvas, name, (width, height), theme, &shown, time);
     }
 

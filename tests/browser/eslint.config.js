@@ -8,6 +8,8 @@ const page = [
   "undo",
   "scenario",
   "announce",
+  "messages",
+  "everyday",
   "fields",
   "layers",
   "overTime",

@@ -17,7 +17,7 @@ const answer = {
     const errors = solution.problems.filter(
       ({ severity }) => severity === "error",
     );
-    fields.report(solution.problems);
+    messages.report(solution.problems);
     if (solution.report !== null) {
       answer.report = solution.report;
       answer.showReport(solution.report);
@@ -124,18 +124,18 @@ const answer = {
    */
   linked(problem) {
     const row = dom.make("li");
-    const control = fields.control(problem.path);
-    const place = fields.name(problem.path);
-    const words = `${problem.message}. ${problem.hint}`.trim();
+    const control = messages.control(problem.path);
+    const place = messages.name(problem.path);
+    const said = messages.words(problem);
     if (control !== undefined && place !== "") {
       const link = dom.make("a", place);
       link.href = `#${control.id}`;
       link.addEventListener("click", (event) =>
         answer.follow(event, problem.path),
       );
-      row.append(link, ": ");
+      row.append(link, said === "" ? "" : ". ");
     }
-    row.append(problem.kind === "needed" ? fields.wanted(problem) : words);
+    row.append(said);
     if (problem.kind === "unknown")
       row.append(" ", answer.dropKey(problem.path));
     return row;
@@ -147,7 +147,7 @@ const answer = {
    */
   follow(event, path) {
     event.preventDefault();
-    const control = fields.control(path);
+    const control = messages.control(path);
     const more = control?.closest("details");
     if (more) more.open = true;
     control?.focus();
@@ -207,9 +207,7 @@ const answer = {
    * @returns {string}
    */
   count(errors, stale) {
-    const needed = errors.every(
-      ({ kind, path }) => kind === "needed" || fields.isEmpty(path),
-    );
+    const needed = errors.every(messages.isNeeded);
     const many = errors.length === 1 ? "one entry" : `${errors.length} entries`;
     const verb = errors.length === 1 ? "needs" : "need";
     const words = needed

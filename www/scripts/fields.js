@@ -12,12 +12,6 @@ const fields = {
   known: new Map(),
 
   /**
-   * Where messages go that belong to no single field.
-   * @type {Map<string, HTMLElement>}
-   */
-  groups: new Map(),
-
-  /**
    * What was typed, so that a field keeps it when the form is made anew.
    * @type {Map<string, { text: string, value: Json | undefined }>}
    */
@@ -25,7 +19,7 @@ const fields = {
 
   forget() {
     fields.known.clear();
-    fields.groups.clear();
+    messages.groups.clear();
   },
 
   /**
@@ -42,15 +36,12 @@ const fields = {
    * @param {string} base
    */
   bind(root, base) {
-    for (const box of dom.all(root, ".field[data-at]:not([data-path])")) {
+    const unbound = ".field[data-at]:not([data-path])";
+    for (const box of dom.all(root, unbound)) {
       const at = box.dataset["at"] ?? "";
       fields.bindBox(box, at === "" ? base : `${base}/${at}`);
     }
-    for (const message of dom.all(root, ".message[data-message]:not([id])")) {
-      const path = base + (message.dataset["message"] ?? "");
-      message.id = `group${path}`;
-      fields.groups.set(path, message);
-    }
+    messages.bind(root, base);
   },
 
   /**
@@ -197,8 +188,7 @@ const fields = {
     control.addEventListener("keydown", (event) => {
       if (event instanceof KeyboardEvent) fields.stepKey(field, event);
     });
-    if (field.box.dataset["words"])
-      fields.offerWords(field, field.box.dataset["words"]);
+    if (field.box.dataset["words"]) everyday.offer(field);
   },
 
   /**
@@ -250,7 +240,7 @@ const fields = {
         : { ...old, at_s: value };
     }
     fields.typed.set(field.path, { text, value });
-    fields.matchWords(field, value);
+    everyday.match(field, value);
     scenario.type(field.path, value, field.label);
   },
 
@@ -261,20 +251,32 @@ const fields = {
    */
   understand(field) {
     const text = field.control.value;
-    const reading =
-      text.trim() === ""
-        ? null
-        : core.read(text, field.box.dataset["kind"] ?? "");
-    const understood =
-      reading !== null && "understood" in reading ? reading.understood : "";
-    const plain = (/** @type {string} */ words) => words.replace(/\s+/g, "");
-    const differs = understood !== "" && plain(understood) !== plain(text);
-    dom.find(field.box, ".understood", HTMLElement).textContent = differs
-      ? `= ${understood}`
-      : "";
+    const kind = field.box.dataset["kind"] ?? "";
+    const reading = text.trim() === "" ? null : core.read(text, kind);
     field.trouble =
       reading !== null && "message" in reading ? reading.message : "";
+    const note = dom.find(field.box, ".understood", HTMLElement);
+    note.textContent = fields.understood(field, reading);
     return reading;
+  },
+
+  /**
+   * What was understood, where that differs from what is written.
+   * @param {Field} field
+   * @param {Reading | null} reading
+   * @returns {string}
+   */
+  understood(field, reading) {
+    if (reading === null || "message" in reading) return "";
+    const { written, understood } = reading;
+    if (field.box.dataset["moment"] !== undefined && Number(written) > 0) {
+      const moment = core.ask((page) => page.moment(Number(written)), null);
+      if (moment?.iso) return moment.words;
+    }
+    const plain = (/** @type {string} */ said) =>
+      said.replace(/\s+/g, "").replaceAll("−", "-");
+    const same = plain(understood) === plain(field.control.value);
+    return same ? "" : `= ${understood}`;
   },
 
   /**
@@ -297,164 +299,5 @@ const fields = {
     event.preventDefault();
     field.control.value = stepped;
     fields.take(field);
-  },
-
-  /**
-   * Everyday choices in words beside a quantity that nobody measures.
-   * @param {Field} field
-   * @param {string} kind
-   */
-  offerWords(field, kind) {
-    const words = dom.copy("words-template");
-    const select = dom.find(words, "select", HTMLSelectElement);
-    const label = dom.find(words, "label", HTMLLabelElement);
-    const source = dom.find(words, ".source", HTMLElement);
-    select.id = `${field.control.id}-words`;
-    label.htmlFor = select.id;
-    label.textContent = `${field.label}, in words`;
-    const choices = core.choices(kind);
-    for (const [i, choice] of choices.entries()) {
-      const range = core.write(choice.written, field.box.dataset["kind"] ?? "");
-      select.append(new Option(`${choice.words}: ${range}`, String(i)));
-    }
-    select.addEventListener("change", () => {
-      const choice = choices[Number(select.value)];
-      if (select.value === "" || choice === undefined) return;
-      scenario.type(field.path, choice.written, field.label);
-      fields.show(field);
-      source.textContent = choice.source;
-    });
-    field.message.before(words);
-    fields.matchWords(field, scenario.get(field.path));
-  },
-
-  /**
-   * Shows which of the everyday choices a value is, if one.
-   * @param {Field} field
-   * @param {Json | undefined} value
-   */
-  matchWords(field, value) {
-    const kind = field.box.dataset["words"];
-    if (kind === undefined) return;
-    const choices = core.choices(kind);
-    const at = choices.findIndex((choice) =>
-      pointer.same(choice.written, value),
-    );
-    dom.find(field.box, "select.words", HTMLSelectElement).value =
-      at < 0 ? "" : String(at);
-    dom.find(field.box, ".source", HTMLElement).textContent =
-      choices[at]?.source ?? "";
-  },
-
-  /**
-   * Puts every problem at the field it belongs to, or at what holds it.
-   * @param {Problem[]} problems
-   */
-  report(problems) {
-    for (const message of fields.groups.values()) message.textContent = "";
-    for (const field of fields.known.values())
-      fields.complain(field, field.trouble, false);
-    for (const problem of problems) {
-      if (problem.severity !== "error") continue;
-      const place = fields.nearest(problem.path);
-      const needed = problem.kind === "needed" || fields.isEmpty(problem.path);
-      const words = needed
-        ? fields.wanted(problem)
-        : `${problem.message}. ${problem.hint}`.trim();
-      if (place.field !== undefined) {
-        if (place.field.trouble === "")
-          fields.complain(place.field, words, needed);
-      } else if (place.group !== undefined) {
-        place.group.textContent = words;
-      }
-    }
-  },
-
-  /**
-   * @param {Field} field
-   * @param {string} words
-   * @param {boolean} needed
-   */
-  complain(field, words, needed) {
-    field.message.textContent = words;
-    field.message.classList.toggle("needed", needed);
-    if (words !== "" && !needed)
-      field.control.setAttribute("aria-invalid", "true");
-    else field.control.removeAttribute("aria-invalid");
-    const more = field.box.closest("details");
-    if (words !== "" && more !== null) more.open = true;
-  },
-
-  /**
-   * Is there nothing yet at this place?
-   * @param {string} path
-   * @returns {boolean}
-   */
-  isEmpty(path) {
-    return scenario.get(path) === "";
-  },
-
-  /**
-   * @param {Problem} problem
-   * @returns {string}
-   */
-  wanted(problem) {
-    const what = problem.kind === "needed" ? problem.message : "";
-    return what === "" ? "Still needed" : `Still needed: ${what}`;
-  },
-
-  /**
-   * The field or the group that shows a place, or what holds it.
-   * @param {string} path
-   * @returns {{ field?: Field, group?: HTMLElement }}
-   */
-  nearest(path) {
-    for (let at = path; ; at = pointer.parent(at)) {
-      const field = fields.known.get(at);
-      if (field !== undefined) return { field };
-      const group = fields.groups.get(at);
-      if (group !== undefined) return { group };
-      if (at === "") return {};
-    }
-  },
-
-  /**
-   * The control to go to for a place.
-   * @param {string} path
-   * @returns {HTMLElement | undefined}
-   */
-  control(path) {
-    const place = fields.nearest(path);
-    if (place.field !== undefined) return place.field.control;
-    const holder = place.group?.closest("fieldset, .row");
-    return holder === null || holder === undefined
-      ? undefined
-      : dom.all(holder, "input, select, button")[0];
-  },
-
-  /**
-   * What a place is called on the page, with what it belongs to: "Layer 2, Thickness".
-   * @param {string} path
-   * @returns {string}
-   */
-  name(path) {
-    const place = fields.nearest(path);
-    const holder = (place.field?.box ?? place.group)?.closest("fieldset");
-    const whose = dom.words(holder?.querySelector("legend") ?? null);
-    return [whose, place.field?.label ?? ""]
-      .filter((words) => words !== "")
-      .join(": ");
-  },
-
-  /**
-   * Brings a place into view and marks it for a moment.
-   * @param {string} path
-   */
-  point(path) {
-    const box = fields.nearest(path).field?.box;
-    if (box === undefined) return;
-    box.scrollIntoView({ block: "nearest" });
-    box.classList.add("changed");
-    setTimeout(() => box.classList.remove("changed"), 1500);
   },
 };

@@ -3,6 +3,10 @@
 /** The layers of the item, from the inside out. */
 const layers = {
   path: "/item/layers",
+
+  /** The choice of no material of the library. */
+  own: "own",
+
   properties: [
     "density_kg_per_m3",
     "heat_capacity_j_per_kg_k",
@@ -69,10 +73,11 @@ const layers = {
     const summary = dom.find(block, "summary", HTMLElement);
     const path = pointer.join(layers.path, i, "name");
     const show = () => {
-      const number = dom.make("span", "Layer ", "unseen");
-      const name = dom.make("span", `: ${layers.names()[i] ?? ""}`, "unseen");
-      legend.replaceChildren(number, String(i + 1), name);
-      summary.textContent = String(scenario.get(path) ?? "") || "More";
+      const own = String(scenario.get(path) ?? "");
+      const before = dom.make("span", "Layer ", "unseen");
+      const after = dom.make("span", own === "" ? "" : `, ${own}`, "unseen");
+      legend.replaceChildren(before, String(i + 1), after);
+      summary.textContent = own === "" ? "More" : own;
     };
     let name = layers.names()[i];
     show();
@@ -118,7 +123,7 @@ const layers = {
     }
     select.append(...groups.values());
     const written = scenario.get(path);
-    select.value = String(written ?? "");
+    select.value = String(written ?? layers.own);
     select.addEventListener("change", () => layers.choose(base, select.value));
     return core.materials().find(({ id }) => id === written);
   },
@@ -134,13 +139,13 @@ const layers = {
       const liquid =
         core.materials().find((material) => material.id === id)?.liquid ??
         false;
-      scenario.set(path, id === "" ? undefined : id);
+      scenario.set(path, id === layers.own ? undefined : id);
       for (const key of layers.properties) {
         const at = pointer.join(base, key);
-        if (id !== "") scenario.set(at, undefined);
+        if (id !== layers.own) scenario.set(at, undefined);
         else if (scenario.get(at) === undefined) scenario.set(at, "");
       }
-      if (id !== "" && !liquid) {
+      if (id !== layers.own && !liquid) {
         scenario.set(pointer.join(base, "motion"), undefined);
         scenario.set(pointer.join(base, "inside_film_w_per_m2_k"), undefined);
       }

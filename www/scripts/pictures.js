@@ -12,7 +12,7 @@ const pictures = {
   paperRatio: 3,
 
   /** Width and height on paper, in pixels of the page. @type {Record<PictureName, [number, number]>} */
-  paper: { section: [300, 250], curve: [660, 260], profile: [340, 250] },
+  paper: { section: [270, 190], curve: [390, 230], profile: [675, 200] },
 
   /** The time that is shown, s after the stop. */
   time: 0,

@@ -72,7 +72,7 @@ const undo = {
     scenario.tree = step.tree;
     scenario.opened = step.opened;
     form.render();
-    fields.point(step.path);
+    messages.point(step.path);
     undo.show();
     schedule.request();
     announce.now(`${word}: ${step.label}`);
