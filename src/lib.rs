@@ -20,7 +20,7 @@ pub mod scale;
 pub mod scenario;
 pub mod units;
 
-#[cfg(target_arch = "wasm32")]
+#[cfg(any(test, target_arch = "wasm32"))]
 mod page;
 
 use answer::{Circumstances, Report, Resolved};

@@ -1,14 +1,26 @@
-// The shapes that cross the door to the core. The core is the authority; this says the same for the checker.
+/** The shapes that cross the door between the page and the core (src/page). */
 
-/** A problem with its place. */
+type Json = null | boolean | number | string | Json[] | { [key: string]: Json };
+type JsonObject = { [key: string]: Json };
+
+type System = "metric" | "us";
+type PictureName = "section" | "curve" | "profile";
+type Theme = "light" | "dark" | "print";
+
+/** What is wrong with a scenario, or unusual about it. */
 interface Problem {
   severity: "error" | "warning";
+  /** JSON Pointer; empty for the whole scenario. */
   path: string;
   message: string;
   hint: string;
+  /**
+   * needed: something is not there yet; unknown: a key nobody knows; text: the text itself cannot be taken;
+   * value: all else.
+   */
+  kind: "needed" | "unknown" | "text" | "value";
 }
 
-/** Temperatures at one moment, °C. */
 interface State {
   hottest_c: number;
   coldest_c: number;
@@ -17,17 +29,24 @@ interface State {
   outside_c: number;
 }
 
-/** What became of a condition. */
-interface Outcome {
-  kind: "already" | "at" | "never" | "not_within";
-  time_s?: number;
-  low_s?: number;
-  high_s?: number;
-  clock?: string;
-  lost_again_s?: number | null;
-  for_good_from_s?: number | null;
-  state?: State;
-}
+type Outcome =
+  | {
+      kind: "already";
+      lost_again_s: number | null;
+      for_good_from_s: number | null;
+    }
+  | {
+      kind: "at";
+      time_s: number;
+      low_s: number;
+      high_s: number;
+      clock?: string;
+      lost_again_s: number | null;
+      for_good_from_s: number | null;
+      state: State;
+    }
+  | { kind: "never"; settles_at: number | null }
+  | { kind: "not_within"; look_ahead_s: number; then: number | null };
 
 interface ConditionReport {
   path: string;
@@ -46,30 +65,19 @@ interface HandFormula {
   path: string;
 }
 
+/** The answer as the core reports it; the batch command writes the same. */
 interface Report {
+  title: string;
   headline: string;
   detail: string;
   ready: Outcome | null;
   ready_when: ConditionReport[];
   standing: Outcome | null;
   must_not: ConditionReport[];
-  heat_balance: {
-    per: string;
-    until_s: number;
-    stored_j: number;
-    in_inner_j: number;
-    in_outer_j: number;
-    relative_error: number;
-  };
   by_hand: HandFormula[];
   course: { start: State; end: State; end_s: number; settles: boolean };
+  /** How far to trust the calculation: what, and how much in words. */
   checks: [string, string][];
-  effort: {
-    nodes: number[];
-    tolerance_k: number[];
-    steps: number;
-    rejected: number;
-  };
   warnings: Problem[];
   cautions: string[];
 }
@@ -79,19 +87,22 @@ interface Solution {
   report: Report | null;
 }
 
-/** What a text was understood as; in the unit of the file. */
-interface Understood {
-  value?: number;
-  low?: number | null;
-  high?: number | null;
-  problem?: string;
+/** A time after the stop. */
+interface Moment {
+  /** "Monday 09:10, 1 day 3 h 10 min after the stop" */
+  words: string;
+  /** "2026-03-02T09:10" where the date of the stop is given, else empty. */
+  iso: string;
 }
 
-interface Pairs {
-  at?: number[];
-  values?: number[];
-  problem?: string;
+interface NumberTable {
+  caption: string;
+  columns: string[];
+  rows: string[][];
 }
+
+/** A text as it was understood, or why it was not. */
+type Reading = { written: Json; understood: string } | { message: string };
 
 interface Material {
   id: string;
@@ -102,87 +113,72 @@ interface Material {
   notes: string;
 }
 
+/** An everyday choice in words. */
 interface Choice {
   words: string;
-  low: number;
-  likely: number;
-  high: number;
+  written: Json;
   source: string;
 }
 
 interface Example {
-  id: string;
   title: string;
+  about: string;
   text: string;
 }
 
-interface PictureTable {
-  caption: string;
-  columns: string[];
-  rows: string[][];
-}
-
-/** The class that wasm-bindgen makes of the core's page. */
-interface CorePage {
+/** The last scenario that was answered. */
+declare class Page {
+  constructor();
   solve(text: string): Solution;
+  forget(): void;
   draw(
-    picture: string,
+    picture: PictureName,
     context: CanvasRenderingContext2D,
     width: number,
     height: number,
     ratio: number,
-    time: number,
-    dark: boolean,
-    us: boolean,
+    time_s: number,
+    theme: Theme,
+    system: System,
   ): void;
-  table(picture: string, time: number, us: boolean): PictureTable;
-  moment_words(time: number): string;
+  table(
+    picture: PictureName,
+    time_s: number,
+    system: System,
+  ): NumberTable | null;
+  moment(time_s: number): Moment | null;
 }
 
-interface CoreFunctions {
+/** The door. */
+interface Door {
   initSync(options: { module: WebAssembly.Module }): void;
-  Page: { new (): CorePage };
-  read_quantity(text: string, kind: string, us: boolean): Understood;
-  write_quantity(
-    value: number,
-    low: number | undefined,
-    high: number | undefined,
-    kind: string,
-    us: boolean,
-  ): string;
-  step_quantity(
+  Page: typeof Page;
+  read(text: string, kind: string, system: System): Reading;
+  write(written: string, kind: string, system: System): string;
+  step(
     text: string,
     kind: string,
-    us: boolean,
+    system: System,
     up: boolean,
     large: boolean,
   ): string | undefined;
-  read_pairs(text: string, at: string, value: string, us: boolean): Pairs;
-  write_pairs(
-    at: Float64Array,
-    values: Float64Array,
-    at_kind: string,
-    value_kind: string,
-    us: boolean,
-  ): string;
+  layer_names(layers: string): string[];
   materials(): Material[];
   choices(of: string): Choice[];
   examples(): Example[];
+  most_bytes(): number;
+  last_bug(): string;
 }
 
-declare const wasm_bindgen: CoreFunctions;
+declare const wasm_bindgen: Door;
 
-/** Any JSON value. */
-type Json = null | boolean | number | string | Json[] | { [key: string]: Json };
-
-/** A scenario while it is being written: anything may still be missing. */
-interface Scenario {
-  [key: string]: Json;
-}
-
-/** What the page remembers between visits. */
-interface Kept {
-  scenario: Scenario;
-  drafts: { [path: string]: string };
-  us: boolean;
+/** A control of the form and the place in the scenario that it shows. */
+interface Field {
+  path: string;
+  box: HTMLElement;
+  control: HTMLInputElement | HTMLSelectElement | HTMLTextAreaElement;
+  message: HTMLElement;
+  /** Why the text could not be read; empty where it could. */
+  trouble: string;
+  label: string;
 }

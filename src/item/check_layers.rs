@@ -73,10 +73,8 @@ fn one(
         let words = "the innermost layer has nothing inside it to be in contact with".to_owned();
         problems.push(Problem::error(format!("{path}/contact_m2_k_per_w"), Trouble::Contradiction { words }));
     }
-    let name = written.name.clone().filter(|name| !name.trim().is_empty());
-    let name = name.or_else(|| material.map(|material| material.name.to_owned()));
     Some(Layer {
-        name: name.unwrap_or_else(|| format!("layer {}", number + 1)),
+        name: layer_name(written.name.as_deref(), material.map(|material| material.name), number),
         thickness: written.thickness_m.value(),
         capacity: density?.times(&heat_capacity?),
         conductivity: conductivity?,
@@ -84,6 +82,12 @@ fn one(
         contact: written.contact_m2_k_per_w.map_or(0.0, crate::scenario::Number::value),
         material: material.map(|material| material.id),
     })
+}
+
+/// What a layer is called: by its own name, else its material's, else its number, which counts from 0 here.
+pub fn layer_name(own: Option<&str>, material: Option<&str>, number: usize) -> String {
+    let own = own.filter(|name| !name.trim().is_empty());
+    own.or(material).map_or_else(|| format!("layer {}", number + 1), str::to_owned)
 }
 
 fn motion(written: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Option<Motion> {

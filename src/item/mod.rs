@@ -10,6 +10,7 @@ mod over_time;
 mod unusual;
 
 pub use check::{Checked, LOOK_AHEAD};
+pub use check_layers::layer_name;
 pub use over_time::OverTime;
 
 use crate::matter::Law;

@@ -6,6 +6,7 @@
 pub mod clock;
 pub mod display;
 pub mod pairs;
+pub mod polynomial;
 pub mod quantity;
 pub mod words;
 

@@ -1,235 +1,297 @@
 "use strict";
 
-/** The answer: solved in the frame of the keystroke, said once typing pauses. */
+/** The answer: one plain sentence, and what stands behind it. The words come from the core. */
 const answer = {
-  /** @type {Report | null} */
+  /**
+   * The last good answer, which stays while an entry is wrong.
+   * @type {Report | null}
+   */
   report: null,
-  waiting: false,
-  /** @type {number | undefined} */
-  saying: undefined,
 
-  /** Solve before the next picture is painted. */
-  soon() {
-    if (answer.waiting) return;
-    answer.waiting = true;
-    requestAnimationFrame(() => {
-      answer.waiting = false;
-      answer.now();
-    });
-  },
-
-  now() {
-    const text = JSON.stringify(model.scenario);
-    const solution = core.page.solve(text);
-    const drafts = model.drafts.size;
-    const errors = solution.problems.filter((one) => one.severity === "error");
-    const homeless = fields.place(
-      solution.problems.concat(solution.report?.warnings ?? []),
-    );
-    answer.showProblems(
-      errors,
-      homeless.filter((one) => one.severity === "error"),
-      drafts,
-    );
-    if (solution.report && drafts === 0) answer.show(solution.report);
-    answer.mark(errors.length + drafts > 0);
-  },
-
-  /** @param {boolean} stale */
-  mark(stale) {
-    document
-      .getElementById("answer")
-      ?.classList.toggle("stale", stale && answer.report !== null);
-    if (stale && answer.report === null) {
-      answer.text("answer-headline", "No answer yet");
-      answer.text(
-        "answer-detail",
-        "Describe the item, how it starts and what is around it.",
-      );
+  /** @param {Solution | null} solution null when the core failed */
+  show(solution) {
+    if (solution === null) {
+      answer.showBug();
+      return;
     }
-    const foot =
-      answer.report && !stale
-        ? answer.report.headline
-        : stale
-          ? "An entry needs a look"
-          : "";
-    answer.text("foot-line", foot);
-    answer.say(
-      stale
-        ? "An entry needs a look."
-        : `${answer.report?.headline ?? ""}. ${answer.report?.detail ?? ""}`,
+    const errors = solution.problems.filter(
+      ({ severity }) => severity === "error",
     );
-    performance.mark("stillheat-answer");
+    messages.report(solution.problems);
+    if (solution.report !== null) {
+      answer.report = solution.report;
+      answer.showReport(solution.report);
+    }
+    answer.showTroubles(errors);
+    answer.showPresence(answer.report !== null);
+    announce.soon(answer.spoken(errors));
   },
 
-  /** @param {string} id @param {string} text */
-  text(id, text) {
-    const element = document.getElementById(id);
-    if (element && element.textContent !== text) element.textContent = text;
+  /** A scenario that has nothing to do with the last answer came onto the page. */
+  forget() {
+    answer.report = null;
+    core.ask((page) => page.forget(), undefined);
   },
 
   /** @param {Report} report */
-  show(report) {
-    answer.report = report;
-    const line = /** @type {HTMLElement} */ (
-      document.getElementById("answer-headline")
+  showReport(report) {
+    const headline = dom.byId("answer-headline", HTMLOutputElement);
+    headline.replaceChildren(
+      answer.timed(report.headline, report.ready ?? report.standing),
     );
-    const clock =
-      report.ready?.clock ??
-      (report.ready ? undefined : report.standing?.clock);
-    if (clock) {
-      const time = document.createElement("time");
-      time.dateTime = clock;
-      time.textContent = report.headline;
-      line.replaceChildren(time);
-    } else line.textContent = report.headline;
-    answer.text("answer-detail", report.detail);
-    document.title = `${report.headline} – Stillheat`;
-    const list = /** @type {HTMLElement} */ (
-      document.getElementById("answer-conditions")
-    );
-    const all = report.ready_when.concat(report.must_not);
-    list.replaceChildren(...all.map((one) => answer.outcome(one)));
-    answer.checks(report);
-    answer.byHand(report);
-    answer.warnings(report);
-    const cautions = /** @type {HTMLElement} */ (
-      document.getElementById("cautions")
-    );
-    cautions.replaceChildren(
-      ...report.cautions.map((words) => answer.paragraph(words)),
-    );
+    dom.byId("answer-detail", HTMLElement).textContent = report.detail;
+    const rows = [...report.ready_when, ...report.must_not];
+    dom
+      .byId("conditions", HTMLElement)
+      .replaceChildren(...rows.map(answer.outcome));
+    dom.byId("foot", HTMLElement).textContent = report.headline;
+    answer.showList("cautions", report.cautions);
+    answer.showWarnings(report.warnings);
+    dom
+      .byId("sure-rows", HTMLElement)
+      .replaceChildren(...report.checks.map(answer.check));
+    answer.showHand(report);
     pictures.show(report);
   },
 
-  /** @param {string} words */
-  paragraph(words) {
-    const element = document.createElement("p");
-    element.textContent = words;
-    return element;
+  /**
+   * Words that stand for a date and time, marked as such.
+   * @param {string} words
+   * @param {Outcome | null} outcome
+   * @returns {Node}
+   */
+  timed(words, outcome) {
+    if (outcome?.kind !== "at" || outcome.clock === undefined)
+      return document.createTextNode(words);
+    const time = dom.make("time", words);
+    time.dateTime = outcome.clock;
+    return time;
   },
 
-  /** @param {ConditionReport} one */
-  outcome(one) {
-    const item = document.createElement("li");
-    const what = document.createElement("span");
-    what.textContent = `${one.path.startsWith("/must_not") ? "must not: " : ""}${one.words}`;
-    const then = document.createElement("b");
-    if (one.outcome.clock) {
-      const time = document.createElement("time");
-      time.dateTime = one.outcome.clock;
-      time.textContent = one.outcome_words;
-      then.append(time);
-    } else then.textContent = one.outcome_words;
-    item.append(what, then);
-    return item;
+  /**
+   * One condition and what became of it.
+   * @param {ConditionReport} condition
+   * @returns {HTMLElement}
+   */
+  outcome(condition) {
+    const row = dom.make("li");
+    const limit = condition.path.startsWith("/must_not");
+    row.append(
+      dom.make("span", `${limit ? "must not: " : ""}${condition.words}`),
+      " ",
+    );
+    const words = dom.make("strong");
+    words.append(answer.timed(condition.outcome_words, condition.outcome));
+    row.append(words);
+    return row;
   },
 
-  /** @param {Report} report */
-  checks(report) {
-    const body = fields.in(document, "#sure tbody");
-    body.replaceChildren(
-      ...report.checks.map(([name, value]) => {
-        const row = document.createElement("tr");
-        const head = document.createElement("th");
-        head.scope = "row";
-        head.textContent = name;
-        row.append(head);
-        row.insertCell().textContent = value;
-        return row;
-      }),
-    );
+  /**
+   * How far one side of the calculation can be trusted.
+   * @param {[string, string]} check
+   * @returns {HTMLElement}
+   */
+  check([what, words]) {
+    const row = dom.make("tr");
+    const name = dom.make("th", what);
+    name.scope = "row";
+    row.append(name, dom.make("td", words));
+    return row;
   },
 
-  /** @param {Report} report */
-  byHand(report) {
-    const place = /** @type {HTMLElement} */ (
-      document.getElementById("by-hand")
-    );
-    place.replaceChildren();
-    if (report.by_hand.length === 0) return;
-    const heading = document.createElement("h3");
-    heading.textContent = "By hand";
-    const table = pictures.table({
-      caption:
-        "What a pocket calculator gives, and whether its formula holds here",
-      columns: ["Formula", "gives", "does it hold?"],
-      rows: report.by_hand.map((one) => [
-        `${one.name}: ${one.formula}`,
-        one.gives,
-        `${one.holds ? "holds" : "does not hold"}: ${one.validity}`,
-      ]),
-    });
-    place.append(heading, table);
+  /**
+   * @param {string} id
+   * @param {string[]} words
+   */
+  showList(id, words) {
+    dom.byId(id, HTMLElement).hidden = words.length === 0;
+    dom
+      .byId(`${id}-list`, HTMLElement)
+      .replaceChildren(...words.map((one) => dom.make("li", one)));
   },
 
-  /** @param {Report} report */
-  warnings(report) {
-    const card = /** @type {HTMLElement} */ (
-      document.getElementById("warnings")
-    );
-    card.hidden = report.warnings.length === 0;
-    fields.in(card, "ul").replaceChildren(
-      ...report.warnings.map((one) => {
-        const item = document.createElement("li");
-        item.textContent = `${one.message.charAt(0).toUpperCase()}${one.message.slice(1)}. ${one.hint}`;
-        return item;
-      }),
-    );
+  /** @param {Problem[]} warnings */
+  showWarnings(warnings) {
+    const list = dom.byId("warnings", HTMLElement);
+    list.hidden = warnings.length === 0;
+    list.replaceChildren(...warnings.map(answer.linked));
   },
 
-  /** @param {Problem[]} errors @param {Problem[]} homeless @param {number} drafts */
-  showProblems(errors, homeless, drafts) {
-    const place = /** @type {HTMLElement} */ (
-      document.getElementById("answer-problems")
-    );
-    const count = errors.length + drafts;
-    place.hidden = count === 0;
-    place.replaceChildren();
-    if (count === 0) return;
-    const last = answer.report ? "The last answer; " : "";
-    place.append(
-      answer.paragraph(
-        `${last}${count === 1 ? "one entry needs" : `${count} entries need`} a look:`,
-      ),
-    );
-    const list = document.createElement("ul");
-    const paths = [...model.drafts.keys(), ...errors.map((one) => one.path)];
-    for (const path of [...new Set(paths)].slice(0, 12)) {
-      const found = fields.nearest(path);
-      const own = errors.find((one) => one.path === path);
-      const item = document.createElement("li");
-      const words = model.drafts.has(path)
-        ? `${answer.nameOf(found)}: not understood`
-        : `${answer.nameOf(found)}: ${own?.message ?? ""}`;
-      if (found) {
-        const link = document.createElement("button");
-        link.type = "button";
-        link.textContent = words;
-        link.addEventListener("click", () => found.focus());
-        item.append(link);
-      } else
-        item.textContent = `${path === "" ? "The file" : path}: ${own?.message ?? ""}`;
-      if (own && homeless.includes(own) && own.hint !== "")
-        item.append(` ${own.hint}`);
-      list.append(item);
+  /**
+   * A problem with a link to the field it is about.
+   * @param {Problem} problem
+   * @returns {HTMLElement}
+   */
+  linked(problem) {
+    const row = dom.make("li");
+    const control = messages.control(problem.path);
+    const place = messages.name(problem.path);
+    const said = messages.words(problem);
+    if (control !== undefined && place !== "") {
+      const link = dom.make("a", place);
+      link.href = `#${control.id}`;
+      link.addEventListener("click", (event) =>
+        answer.follow(event, problem.path),
+      );
+      row.append(link, said === "" ? "" : ". ");
     }
-    place.append(list);
+    row.append(said);
+    if (problem.kind === "unknown")
+      row.append(" ", answer.dropKey(problem.path));
+    return row;
   },
 
-  /** @param {HTMLElement | null} control */
-  nameOf(control) {
-    const label =
-      control && document.querySelector(`label[for="${control.id}"]`);
-    return label?.textContent ?? control?.getAttribute("aria-label") ?? "Here";
+  /**
+   * @param {MouseEvent} event
+   * @param {string} path
+   */
+  follow(event, path) {
+    event.preventDefault();
+    const control = messages.control(path);
+    const more = control?.closest("details");
+    if (more) more.open = true;
+    control?.focus();
   },
 
-  /** Says the answer once typing has paused. @param {string} words */
-  say(words) {
-    window.clearTimeout(answer.saying);
-    answer.saying = window.setTimeout(
-      () => answer.text("announce", words),
-      700,
+  /**
+   * A key that nobody knows has no field; here it can be taken out.
+   * @param {string} path
+   * @returns {HTMLButtonElement}
+   */
+  dropKey(path) {
+    const name = pointer.last(path);
+    const drop = () =>
+      scenario.reshape(
+        `"${name}" taken out`,
+        path,
+        () => scenario.set(path, undefined),
+        "answer",
+      );
+    return dom.button(`Take "${name}" out`, drop, "quiet");
+  },
+
+  /**
+   * What has to be mended before there is a new answer.
+   * @param {Problem[]} errors
+   */
+  showTroubles(errors) {
+    const stale = errors.length > 0 && answer.report !== null;
+    document.body.classList.toggle("stale", stale);
+    dom.byId("troubles", HTMLElement).hidden = errors.length === 0;
+    dom.byId("troubles-title", HTMLElement).textContent = answer.count(
+      errors,
+      stale,
     );
+    dom
+      .byId("troubles-list", HTMLElement)
+      .replaceChildren(...errors.map(answer.linked));
+    if (answer.report !== null) {
+      const { headline } = answer.report;
+      dom.byId("foot", HTMLElement).textContent = stale
+        ? `The last answer: ${headline}`
+        : headline;
+      document.title = stale ? "Stillheat" : `${headline} · Stillheat`;
+      return;
+    }
+    const words = "No answer yet";
+    dom.byId("answer-headline", HTMLOutputElement).replaceChildren(words);
+    dom.byId("answer-detail", HTMLElement).textContent = "";
+    dom.byId("conditions", HTMLElement).replaceChildren();
+    dom.byId("foot", HTMLElement).textContent = words;
+    document.title = "Stillheat";
+  },
+
+  /**
+   * @param {Problem[]} errors
+   * @param {boolean} stale
+   * @returns {string}
+   */
+  count(errors, stale) {
+    const needed = errors.every(messages.isNeeded);
+    const many = errors.length === 1 ? "one entry" : `${errors.length} entries`;
+    const verb = errors.length === 1 ? "needs" : "need";
+    const words = needed
+      ? `${many} still to be made:`
+      : `${many} ${verb} a look:`;
+    return stale
+      ? `This is the last answer; ${words}`
+      : words.charAt(0).toUpperCase() + words.slice(1);
+  },
+
+  /** @param {boolean} there */
+  showPresence(there) {
+    document.body.classList.remove("broken");
+    for (const id of ["pictures", "sure"])
+      dom.byId(id, HTMLElement).hidden = !there;
+    if (!there) dom.byId("cautions", HTMLElement).hidden = true;
+  },
+
+  /**
+   * @param {Problem[]} errors
+   * @returns {string}
+   */
+  spoken(errors) {
+    if (errors.length > 0)
+      return answer.count(errors, answer.report !== null).replace(/:$/, ".");
+    return answer.report === null
+      ? ""
+      : `${answer.report.headline}. ${answer.report.detail}`;
+  },
+
+  /** @param {Report} report */
+  showHand(report) {
+    const words = new Map(
+      [...report.ready_when, ...report.must_not].map((one) => [
+        one.path,
+        one.words,
+      ]),
+    );
+    const blocks = report.by_hand.map((formula) =>
+      answer.hand(formula, words.get(formula.path) ?? ""),
+    );
+    dom.byId("hand-list", HTMLElement).replaceChildren(...blocks);
+    dom.byId("hand", HTMLElement).hidden = blocks.length === 0;
+  },
+
+  /**
+   * @param {HandFormula} formula
+   * @param {string} condition
+   * @returns {HTMLElement}
+   */
+  hand(formula, condition) {
+    const block = dom.make(
+      "div",
+      "",
+      formula.holds ? "by-hand" : "by-hand does-not-hold",
+    );
+    const head = dom.make("p");
+    head.append(
+      dom.make("strong", formula.name),
+      `, ${formula.holds ? "which holds here" : "which does not hold here"}: `,
+    );
+    head.append(dom.make("span", formula.gives, "gives"));
+    const about = condition === "" ? "" : `For ${condition}: `;
+    block.append(
+      head,
+      dom.make("p", `${about}${formula.validity}.`, "note"),
+      dom.make("p", formula.formula, "note formula"),
+    );
+    return block;
+  },
+
+  /** A mistake of our own: no number stays on the screen. */
+  showBug() {
+    answer.report = null;
+    document.body.classList.remove("stale");
+    document.body.classList.add("broken");
+    const words = "No answer: Stillheat made a mistake of its own";
+    dom.byId("answer-headline", HTMLOutputElement).replaceChildren(words);
+    dom.byId("answer-detail", HTMLElement).textContent =
+      `Your entries are all here. Please save the scenario and hand it on with these words, so that it can be mended: ${core.bug}`;
+    dom.byId("foot", HTMLElement).textContent = words;
+    dom.byId("conditions", HTMLElement).replaceChildren();
+    for (const id of ["pictures", "sure", "cautions", "troubles"])
+      dom.byId(id, HTMLElement).hidden = true;
+    announce.soon(words);
   },
 };

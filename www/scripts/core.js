@@ -1,63 +1,117 @@
 "use strict";
 
-/** The core: decoded and started once, then called. */
+/** The core behind its door, and what happens when it makes a mistake of its own. */
 const core = {
-  /** @type {CorePage} */
-  page: /** @type {any} */ (null),
-  /** US customary units? */
-  us: false,
-  /** @type {Material[]} */
-  materials: [],
+  /** @type {Page | null} */
+  page: null,
 
+  /** What the core said when it failed; empty while all is well. */
+  bug: "",
+
+  /** Takes the program out of the page and starts it. */
   start() {
-    const element = /** @type {HTMLElement} */ (
-      document.getElementById("core")
-    );
-    const text = atob(element.textContent || "");
+    const text = atob(dom.byId("core", HTMLScriptElement).textContent.trim());
     const bytes = new Uint8Array(text.length);
     for (let i = 0; i < text.length; i += 1) bytes[i] = text.charCodeAt(i);
-    element.remove();
     wasm_bindgen.initSync({ module: new WebAssembly.Module(bytes) });
     core.page = new wasm_bindgen.Page();
-    core.materials = wasm_bindgen.materials();
+  },
+
+  /**
+   * Asks the core; gives the stand-in when the core fails, which is then told in one plain sentence.
+   * @template T
+   * @param {(page: Page, door: Door) => T} question
+   * @param {T} standIn
+   * @returns {T}
+   */
+  ask(question, standIn) {
+    try {
+      core.page ??= new wasm_bindgen.Page();
+      return question(core.page, wasm_bindgen);
+    } catch (error) {
+      core.page = null;
+      core.bug = core.cause(error);
+      return standIn;
+    }
+  },
+
+  /**
+   * @param {unknown} error
+   * @returns {string}
+   */
+  cause(error) {
+    try {
+      const said = wasm_bindgen.last_bug();
+      if (said) return said;
+    } catch {
+      // The core cannot even say what happened; what the browser says must do.
+    }
+    return error instanceof Error ? error.message : String(error);
+  },
+
+  /**
+   * @param {string} text
+   * @returns {Solution | null} null when the core failed
+   */
+  solve(text) {
+    core.bug = "";
+    return core.ask(
+      (page) => page.solve(text),
+      /** @type {Solution | null} */ (null),
+    );
   },
 
   /**
    * @param {string} text
    * @param {string} kind
+   * @returns {Reading}
    */
   read(text, kind) {
-    return wasm_bindgen.read_quantity(text, kind, core.us);
+    return core.ask((_, door) => door.read(text, kind, store.system), {
+      message: "This cannot be read",
+    });
   },
 
   /**
-   * A number or a number with its spread, as text.
-   * @param {Json} value
+   * @param {Json} written
    * @param {string} kind
+   * @returns {string}
    */
-  write(value, kind) {
-    if (typeof value === "number") {
-      return wasm_bindgen.write_quantity(
-        value,
-        undefined,
-        undefined,
-        kind,
-        core.us,
-      );
-    }
-    const spread = /** @type {any} */ (value);
-    if (
-      spread === null ||
-      typeof spread !== "object" ||
-      typeof spread.value !== "number"
-    )
-      return "";
-    return wasm_bindgen.write_quantity(
-      spread.value,
-      spread.low,
-      spread.high,
-      kind,
-      core.us,
+  write(written, kind) {
+    return core.ask(
+      (_, door) => door.write(JSON.stringify(written), kind, store.system),
+      "",
     );
+  },
+
+  /**
+   * @param {string} text
+   * @param {string} kind
+   * @param {boolean} up
+   * @param {boolean} large
+   * @returns {string | undefined}
+   */
+  step(text, kind, up, large) {
+    return core.ask(
+      (_, door) => door.step(text, kind, store.system, up, large),
+      undefined,
+    );
+  },
+
+  /** @type {Material[] | null} */
+  keptMaterials: null,
+
+  /** @returns {Material[]} */
+  materials() {
+    core.keptMaterials ??= core.ask((_, door) => door.materials(), []);
+    return core.keptMaterials;
+  },
+
+  /**
+   * @param {string} kind
+   * @returns {Choice[]}
+   */
+  choices(kind) {
+    return core.ask((_, door) => door.choices(kind), []);
   },
 };

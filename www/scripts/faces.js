@@ -1,256 +1,197 @@
 "use strict";
 
-/** What the faces see, row by row over time. */
+/** What the faces see, row by row of their programmes. */
 const faces = {
-  /** Keys of a quantity over time, by the unit of its values. */
-  keys: {
-    temperature: {
-      from: "from_c",
-      to: "to_c",
-      mean: "mean_c",
-      amplitude: "amplitude_k",
-      values: "values_c",
-      swing: "temperature_difference",
-    },
-    heat_flux: {
-      from: "from_w_per_m2",
-      to: "to_w_per_m2",
-      mean: "mean_w_per_m2",
-      amplitude: "amplitude_w_per_m2",
-      values: "values_w_per_m2",
-      swing: "heat_flux",
-    },
-  },
+  path: "/surroundings",
+
+  /** What a row can say, by what the face sees; `from_s` goes with each. */
+  kinds: ["exchange", "held_c", "heat_flux_into_w_per_m2", "insulated"],
 
   render() {
-    const place = /** @type {HTMLElement} */ (document.getElementById("faces"));
-    const sides = /** @type {[string, string][]} */ ([["outer", "Outside"]]);
-    if (model.hasInnerFace() || model.get("/surroundings/inner") !== undefined)
-      sides.push(["inner", "Inside"]);
-    place.replaceChildren(
-      ...sides.map(([side, words]) => faces.one(side, words, sides.length > 1)),
-    );
-  },
-
-  /** @param {string} side @param {string} words @param {boolean} titled */
-  one(side, words, titled) {
-    const path = `/surroundings/${side}`;
-    const element = fields.clone("face-template");
-    element.dataset["path"] = path;
-    const heading = fields.in(element, "h3");
-    heading.textContent = words;
-    heading.hidden = !titled;
-    element.setAttribute("aria-label", words);
-    const rows = model.get(path) ?? [];
-    const list = fields.in(element, ".rows");
-    if (rows.length === 0) list.append(faces.emptyRow(path));
-    for (let i = 0; i < rows.length; i += 1)
-      list.append(
-        faces.row(`${path}/${i}`, { first: i === 0, alone: rows.length === 1 }),
+    const sides =
+      layers.isHollow() || scenario.get("/surroundings/inner") !== undefined
+        ? ["outer", "inner"]
+        : ["outer"];
+    dom
+      .byId("faces", HTMLElement)
+      .replaceChildren(
+        ...sides.map((side) => faces.face(side, sides.length > 1)),
       );
-    const then = fields.in(element, ".then");
-    then.id = fields.id(`${path}/then`);
-    then.hidden = rows.length === 0;
-    then.addEventListener("click", () => {
-      model.change(
-        () => {
-          const all = model.get(path);
-          const next = model.copy(all[all.length - 1]);
-          next.from_s = (next.from_s ?? 0) + 4 * 3600;
-          all.push(next);
-        },
-        { structure: true },
-      );
-      const last = model.get(path).length - 1;
-      document.getElementById(fields.id(`${path}/${last}/from_s`))?.focus();
-    });
-    return element;
-  },
-
-  /** A face about which nothing is said. @param {string} path */
-  emptyRow(path) {
-    const element = faces.row(`${path}/0`, { first: true, alone: true });
-    return element;
-  },
-
-  /** @param {any} row */
-  kind(row) {
-    if (row === undefined || row.insulated !== undefined) return "insulated";
-    if (row.held_c !== undefined) return "held";
-    if (row.heat_flux_into_w_per_m2 !== undefined) return "flux";
-    return "exchange";
   },
 
   /**
-   * @param {string} path
-   * @param {{ first: boolean, alone: boolean }} about
-   * @returns {HTMLElement}
+   * One face with the rows of its programme.
+   * @param {string} side
+   * @param {boolean} named
+   * @returns {DocumentFragment}
    */
-  row(path, about) {
-    const row = model.get(path);
-    const kind = faces.kind(row);
-    const element = fields.clone("row-template");
-    element.dataset["path"] = path;
-    fields.in(element, ".from").hidden = about.first;
-    for (const one of ["exchange", "held", "flux"]) {
-      const part = fields.in(element, `.kind-${one}`);
-      if (one !== kind) part.remove();
+  face(side, named) {
+    const base = pointer.join(faces.path, side);
+    const made = dom.copy("face-template");
+    const legend = dom.find(made, "legend", HTMLElement);
+    legend.textContent = side === "inner" ? "Inner face" : "Outer face";
+    legend.classList.toggle("unseen", !named);
+    const rows = scenario.list(base);
+    const count = Math.max(1, rows.length);
+    const box = dom.find(made, ".rows", HTMLElement);
+    for (let i = 0; i < count; i += 1)
+      box.append(faces.row(pointer.join(base, i), i, count));
+    const add = dom.find(made, "[data-add-row]", HTMLButtonElement);
+    add.id = `then${base}`;
+    add.addEventListener("click", () => faces.addRow(base));
+    fields.bind(made, base);
+    return made;
+  },
+
+  /**
+   * One row: what the face sees from a time on.
+   * @param {string} base
+   * @param {number} i
+   * @param {number} count rows in all
+   * @returns {DocumentFragment}
+   */
+  row(base, i, count) {
+    const made = dom.copy("row-template");
+    const group = dom.find(made, ".row", HTMLElement);
+    group.setAttribute(
+      "aria-label",
+      i === 0 ? "From the stop on" : `Row ${i + 1}`,
+    );
+    if (i === 0 && scenario.get(pointer.join(base, "from_s")) === undefined)
+      dom.find(made, ".from", HTMLElement).remove();
+    const kind = faces.kind(base);
+    faces.bindKind(made, base, kind);
+    for (const box of dom.all(made, ".over-time"))
+      faces.fillOverTime(box, base, kind);
+    if (kind !== "exchange") {
+      for (const key of ["film_w_per_m2_k", "emissivity"]) {
+        if (scenario.get(pointer.join(base, key)) === undefined)
+          dom.find(made, `[data-at="${key}"]`, HTMLElement).remove();
+      }
     }
-    const select = fields.in(element, ".kind");
+    const remove = dom.find(made, "[data-remove]", HTMLButtonElement);
+    if (count < 2) remove.parentElement?.remove();
+    else remove.addEventListener("click", () => faces.removeRow(base, i));
+    fields.bind(made, base);
+    return made;
+  },
+
+  /**
+   * @param {HTMLElement} box
+   * @param {string} base
+   * @param {string} kind
+   */
+  fillOverTime(box, base, kind) {
+    const key = box.dataset["over"] ?? "";
+    const path = pointer.join(base, key);
+    const there = scenario.get(path) !== undefined;
+    const exchanges = kind === "exchange";
+    const wanted = key === kind || (exchanges && key === "temperature_c");
+    const offered =
+      exchanges &&
+      key === "radiation_to_c" &&
+      scenario.get(pointer.join(base, "emissivity")) !== undefined;
+    if (there || wanted || offered) overTime.render(box, path);
+    else box.remove();
+  },
+
+  /**
+   * @param {string} base
+   * @returns {string}
+   */
+  kind(base) {
+    const row = scenario.get(base);
+    if (row === undefined) return "insulated";
+    return (
+      faces.kinds.find((kind) => pointer.isObject(row) && kind in row) ??
+      "exchange"
+    );
+  },
+
+  /**
+   * @param {DocumentFragment} made
+   * @param {string} base
+   * @param {string} kind
+   */
+  bindKind(made, base, kind) {
+    const box = dom.find(made, '[data-kind="sees"]', HTMLElement);
+    const select = dom.find(box, "select", HTMLSelectElement);
+    const label = dom.find(box, "label", HTMLLabelElement);
+    select.id = `sees${base}`;
+    label.htmlFor = select.id;
     select.value = kind;
     select.addEventListener("change", () =>
-      faces.change(path, select.value, select.id),
+      scenario.reshape(
+        `It sees ${dom.words(select.selectedOptions[0] ?? null)}`,
+        base,
+        () => faces.put(base, faces.changed(scenario.get(base), select.value)),
+        select.id,
+      ),
     );
-    fields.in(element, ".row-end").hidden = about.alone;
-    fields.in(element, ".remove").addEventListener("click", () => {
-      model.change(
-        () => {
-          model.set(path, undefined);
-          const list = path.slice(0, path.lastIndexOf("/"));
-          const first = model.get(`${list}/0`);
-          if (first) delete first.from_s;
-          model.forget(list);
-        },
-        { structure: true },
-      );
-      document
-        .getElementById(
-          fields.id(`${path.slice(0, path.lastIndexOf("/"))}/then`),
-        )
-        ?.focus();
-    });
-    const radiation = element.querySelector(".radiation");
-    if (
-      radiation &&
-      row?.radiation_to_c === undefined &&
-      row?.emissivity === undefined
-    )
-      radiation.remove();
-    if (
-      radiation &&
-      typeof row?.radiation_to_c === "object" &&
-      row.radiation_to_c.value === undefined
-    ) {
-      radiation.className = "varying";
+  },
+
+  /**
+   * A row may be the first of a list that is not there yet.
+   * @param {string} base
+   * @param {Json} row
+   */
+  put(base, row) {
+    const list = pointer.parent(base);
+    const inList = /\/\d+$/.test(base);
+    if (inList && !Array.isArray(scenario.get(list))) scenario.set(list, [row]);
+    else scenario.set(base, row);
+  },
+
+  /**
+   * A row that says something else; its time and its temperature stay.
+   * @param {Json | undefined} old
+   * @param {string} kind
+   * @returns {Json}
+   */
+  changed(old, kind) {
+    const row = pointer.isObject(old) ? old : {};
+    /** @type {JsonObject} */
+    const from = row["from_s"] === undefined ? {} : { from_s: row["from_s"] };
+    const temperature = row["temperature_c"] ?? row["held_c"] ?? "";
+    switch (kind) {
+      case "exchange":
+        return { ...from, temperature_c: temperature, film_w_per_m2_k: "" };
+      case "held_c":
+        return { ...from, held_c: temperature };
+      case "heat_flux_into_w_per_m2":
+        return { ...from, heat_flux_into_w_per_m2: "" };
+      default:
+        return { ...from, insulated: true };
     }
-    for (const varying of element.querySelectorAll(".varying"))
-      faces.varying(/** @type {HTMLElement} */ (varying), path);
-    fields.label(element, path);
-    fields.mount(element, path);
-    return element;
   },
 
-  /** @param {string} path @param {string} kind @param {string} id */
-  change(path, kind, id) {
-    const before = model.get(path) ?? {};
-    const known = before.temperature_c ?? before.held_c ?? 20;
-    const rows = /** @type {{ [kind: string]: any }} */ ({
-      exchange: {
-        temperature_c: known,
-        film_w_per_m2_k: { value: 7, low: 5, high: 10 },
-      },
-      held: { held_c: known },
-      flux: { heat_flux_into_w_per_m2: 0 },
-      insulated: { insulated: true },
-    });
-    model.change(
-      () => {
-        const list = path.slice(0, path.lastIndexOf("/"));
-        if (/[0-9]$/.test(path) && !Array.isArray(model.get(list)))
-          model.set(list, []);
-        const from =
-          before.from_s === undefined ? {} : { from_s: before.from_s };
-        model.set(path, { ...from, ...rows[kind] });
-        model.forget(path);
-      },
-      { structure: true },
+  /** @param {string} base */
+  addRow(base) {
+    const rows = scenario.list(base);
+    const last = rows.at(-1) ?? { insulated: true };
+    const row = { ...(pointer.isObject(last) ? last : {}), from_s: "" };
+    const at = Math.max(1, rows.length);
+    const change = () =>
+      scenario.set(base, rows.length === 0 ? [last, row] : [...rows, row]);
+    scenario.reshape(
+      "Row added",
+      base,
+      change,
+      fields.id(pointer.join(base, at, "from_s")),
     );
-    document.getElementById(id)?.focus();
   },
 
-  /** @param {any} value */
-  how(value) {
-    if (
-      value === undefined ||
-      value === null ||
-      typeof value !== "object" ||
-      "value" in value
-    )
-      return "number";
-    if ("at_s" in value) return "table";
-    return "period_s" in value ? "cycle" : "ramp";
-  },
-
-  /** A quantity that may change over time. @param {HTMLElement} element @param {string} base */
-  varying(element, base) {
-    const path = `${base}/${element.dataset["field"]}`;
-    const kind = /** @type {"temperature" | "heat_flux"} */ (
-      element.dataset["kind"]
-    );
-    const keys = faces.keys[kind];
-    const label =
-      /** @type {HTMLElement} */ (element.querySelector("label")).textContent ??
-      "";
-    const how = faces.how(model.get(path));
-    const body = fields.clone("varying-template");
-    const select = fields.in(body, ".how");
-    fields.in(body, ".varying-label").textContent = label;
-    select.setAttribute("aria-label", `${label}: over time`);
-    select.id = fields.id(`${path}/how`);
-    select.value = how;
-    select.addEventListener("change", () =>
-      faces.changeHow(path, keys, select.value, select.id),
-    );
-    for (const one of ["number", "ramp", "cycle", "table"])
-      if (one !== how) fields.in(body, `.how-${one}`).remove();
-    for (const field of body.querySelectorAll(".field")) {
-      const one = /** @type {HTMLElement} */ (field);
-      const key = one.dataset["field"] ?? "";
-      if (one.dataset["kind"] === "")
-        one.dataset["kind"] = key === "amplitude" ? keys.swing : kind;
-      if (one.dataset["table"] !== undefined)
-        one.dataset["table"] = keys.values;
-      const real = /** @type {{ [key: string]: string }} */ (keys)[key];
-      if (real !== undefined) one.dataset["field"] = real;
-    }
-    element.classList.remove("field");
-    element.replaceChildren(...body.childNodes);
-    fields.mount(element, path);
-  },
-
-  /** @param {string} path @param {any} keys @param {string} how @param {string} id */
-  changeHow(path, keys, how, id) {
-    const before = model.get(path);
-    const first = faces.typical(before, keys);
-    const ways = /** @type {{ [how: string]: any }} */ ({
-      number: first,
-      ramp: { [keys.from]: first, [keys.to]: first, over_s: 4 * 3600 },
-      cycle: {
-        [keys.mean]: first,
-        [keys.amplitude]: 5,
-        period_s: 86400,
-        highest_at_s: 9 * 3600,
-      },
-      table: { at_s: [0, 4 * 3600], [keys.values]: [first, first] },
-    });
-    model.change(
-      () => {
-        model.set(path, ways[how]);
-        model.forget(path);
-      },
-      { structure: true },
-    );
-    document.getElementById(id)?.focus();
-  },
-
-  /** @param {any} value @param {any} keys @returns {number} */
-  typical(value, keys) {
-    if (typeof value === "number") return value;
-    const at =
-      value?.value ??
-      value?.[keys.from] ??
-      value?.[keys.mean] ??
-      value?.[keys.values]?.[0];
-    return typeof at === "number" ? at : 20;
+  /**
+   * @param {string} base
+   * @param {number} i
+   */
+  removeRow(base, i) {
+    const list = pointer.parent(base);
+    const change = () => {
+      scenario.set(base, undefined);
+      // The first row begins at the stop.
+      if (i === 0) scenario.set(pointer.join(list, 0, "from_s"), undefined);
+    };
+    scenario.reshape("Row removed", list, change, `then${list}`);
   },
 };

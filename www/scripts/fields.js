@@ -1,342 +1,303 @@
 "use strict";
 
-/** Text fields for quantities: written as on paper, understood by the core, never lost. */
+/**
+ * Fields of the form and the places in the scenario that they show.
+ *
+ * A field is a `.field` box with a label and one control. Its place is `data-at`, below the place of what it
+ * belongs to; `data-kind` says how its text is read. `data-optional` holds the words of the button that asks for
+ * it; until then it is not there. `data-words` offers everyday choices.
+ */
 const fields = {
-  /** An id that belongs to a path. @param {string} path */
-  id(path) {
-    return `f${path.replaceAll(/[^a-zA-Z0-9]/g, "-")}`;
-  },
+  /** @type {Map<string, Field>} */
+  known: new Map(),
 
   /**
-   * A fresh copy of a template's content.
-   * @param {string} id
-   * @returns {HTMLElement}
+   * What was typed, so that a field keeps it when the form is made anew.
+   * @type {Map<string, { text: string, value: Json | undefined }>}
    */
-  clone(id) {
-    const template = /** @type {HTMLTemplateElement} */ (
-      document.getElementById(id)
-    );
-    const holder = document.createElement("div");
-    holder.append(template.content.cloneNode(true));
-    return holder.childElementCount === 1
-      ? /** @type {HTMLElement} */ (holder.firstElementChild)
-      : holder;
-  },
+  typed: new Map(),
 
-  /** @param {ParentNode} root @param {string} selector @returns {any} */
-  in(root, selector) {
-    return root.querySelector(selector);
+  forget() {
+    fields.known.clear();
+    messages.groups.clear();
   },
 
   /**
-   * Ties every bare label in `root` to the control after it.
-   * @param {HTMLElement} root
    * @param {string} path
+   * @returns {string} id of the control that shows this place
    */
-  label(root, path) {
-    for (const label of root.querySelectorAll("label:not([for])")) {
-      const control = /** @type {HTMLElement | null} */ (
-        label.nextElementSibling
-      );
-      if (!control || !["SELECT", "INPUT"].includes(control.tagName)) continue;
-      control.id = fields.id(`${path}/${control.className}`);
-      /** @type {HTMLLabelElement} */ (label).htmlFor = control.id;
-    }
+  id(path) {
+    return `at${path}`;
   },
 
   /**
-   * Brings every field below `root` to life; their places are below `base`.
-   * @param {HTMLElement} root
+   * Binds all fields inside `root` that are not bound yet to places below `base`.
+   * @param {ParentNode} root
    * @param {string} base
    */
-  mount(root, base) {
-    for (const field of root.querySelectorAll(".field")) {
-      const element = /** @type {HTMLElement} */ (field);
-      if (element.dataset["path"] === undefined) fields.mountOne(element, base);
+  bind(root, base) {
+    const unbound = ".field[data-at]:not([data-path])";
+    for (const box of dom.all(root, unbound)) {
+      const at = box.dataset["at"] ?? "";
+      fields.bindBox(box, at === "" ? base : `${base}/${at}`);
     }
-  },
-
-  /** @param {HTMLElement} element @param {string} base */
-  mountOne(element, base) {
-    const key = element.dataset["field"] ?? "";
-    const path = key.startsWith("/")
-      ? key
-      : key === ""
-        ? base
-        : `${base}/${key}`;
-    element.dataset["path"] = path;
-    const input = document.createElement("input");
-    input.id =
-      fields.id(path) +
-      (element.dataset["table"] === undefined ? "" : "-table");
-    input.dataset["path"] = path;
-    input.type = "text";
-    input.spellcheck = false;
-    input.setAttribute(
-      "aria-describedby",
-      `${input.id}-understood ${input.id}-problem`,
-    );
-    if (element.dataset["text"] !== undefined) {
-      input.classList.add("words");
-      input.maxLength = Number(element.dataset["text"]);
-    }
-    if (element.dataset["optional"] !== undefined)
-      input.placeholder = element.dataset["optional"];
-    /** @type {HTMLLabelElement} */ (element.querySelector("label")).htmlFor =
-      input.id;
-    element.append(
-      element.dataset["choices"] ? fields.withChoices(element, input) : input,
-    );
-    for (const name of ["understood", "problem", "source"]) {
-      const line = document.createElement("p");
-      line.className = name;
-      line.id = `${input.id}-${name}`;
-      element.append(line);
-    }
-    input.value = model.drafts.get(path) ?? fields.written(element, path);
-    input.addEventListener("input", () => fields.typed(element, input));
-    input.addEventListener(
-      "focus",
-      () => (input.dataset["before"] = input.value),
-    );
-    input.addEventListener("blur", () => (model.typing = ""));
-    input.addEventListener("keydown", (event) =>
-      fields.stepped(event, element, input),
-    );
-    fields.understand(element, input);
-  },
-
-  /** @param {HTMLElement} element @param {HTMLInputElement} input */
-  withChoices(element, input) {
-    const holder = document.createElement("div");
-    const chooser = document.createElement("div");
-    const select = document.createElement("select");
-    holder.className = "entry";
-    chooser.className = "chooser";
-    const label = /** @type {HTMLElement} */ (element.querySelector("label"))
-      .textContent;
-    select.setAttribute("aria-label", `${label}: choose in words`);
-    select.title = "Choose in words";
-    select.append(new Option("Choose in words", ""));
-    const choices = wasm_bindgen.choices(
-      /** @type {string} */ (element.dataset["choices"]),
-    );
-    const kind = element.dataset["kind"] ?? "";
-    choices.forEach((choice, i) => {
-      const spread = {
-        value: choice.likely,
-        low: choice.low,
-        high: choice.high,
-      };
-      select.append(
-        new Option(`${choice.words}: ${core.write(spread, kind)}`, String(i)),
-      );
-    });
-    select.addEventListener("change", () => {
-      const choice = choices[Number(select.value)];
-      if (select.value === "" || !choice) return;
-      select.value = "";
-      const spread = {
-        value: choice.likely,
-        low: choice.low,
-        high: choice.high,
-      };
-      input.value = core.write(
-        choice.low === choice.high ? choice.likely : spread,
-        kind,
-      );
-      fields.typed(element, input);
-      fields.in(element, ".source").textContent =
-        `${choice.words}: ${choice.source}`;
-      input.focus();
-    });
-    chooser.append(select);
-    holder.append(input, chooser);
-    return holder;
+    messages.bind(root, base);
   },
 
   /**
-   * What the scenario holds, as text.
-   * @param {HTMLElement} element
+   * @param {HTMLElement} box
    * @param {string} path
-   * @returns {string}
    */
-  written(element, path) {
-    const value = model.get(path);
-    const kind = element.dataset["kind"] ?? "";
-    if (value === undefined || value === null) return "";
-    if (element.dataset["text"] !== undefined) return String(value);
-    if (element.dataset["table"] !== undefined) {
-      return fields.writtenPairs(
-        value.at_s,
-        value[element.dataset["table"] ?? ""],
-        "duration",
-        kind,
-      );
-    }
-    if (element.dataset["property"] !== undefined && value.at_c !== undefined) {
-      return fields.writtenPairs(value.at_c, value.values, "temperature", kind);
-    }
-    if (
-      element.dataset["property"] !== undefined &&
-      value.polynomial_in_c !== undefined
-    ) {
-      return "a polynomial, see the file";
-    }
-    return core.write(value, kind);
-  },
-
-  /** @param {number[]} at @param {number[]} values @param {string} atKind @param {string} kind */
-  writtenPairs(at, values, atKind, kind) {
-    if (!Array.isArray(at) || !Array.isArray(values)) return "";
-    return wasm_bindgen.write_pairs(
-      new Float64Array(at),
-      new Float64Array(values),
-      atKind,
-      kind,
-      core.us,
-    );
-  },
-
-  /**
-   * What a text says, as a value of the file, or the problem with it.
-   * @param {HTMLElement} element
-   * @param {string} text
-   * @param {string} path
-   * @returns {{ value?: Json, problem?: string }}
-   */
-  meant(element, text, path) {
-    const kind = element.dataset["kind"] ?? "";
-    if (text.trim() === "") return {};
-    if (element.dataset["text"] !== undefined) return { value: text };
-    if (element.dataset["table"] !== undefined) {
-      const pairs = wasm_bindgen.read_pairs(text, "duration", kind, core.us);
-      if (pairs.problem !== undefined) return { problem: pairs.problem };
-      const before = model.get(path);
-      const table = /** @type {{ [key: string]: Json }} */ ({
-        at_s: pairs.at ?? [],
-        [element.dataset["table"] ?? ""]: pairs.values ?? [],
-      });
-      if (before?.repeats_every_s !== undefined)
-        table["repeats_every_s"] = before.repeats_every_s;
-      return { value: table };
-    }
-    if (element.dataset["property"] !== undefined && text.includes(":")) {
-      const pairs = wasm_bindgen.read_pairs(text, "temperature", kind, core.us);
-      if (pairs.problem !== undefined) return { problem: pairs.problem };
-      return { value: { at_c: pairs.at ?? [], values: pairs.values ?? [] } };
-    }
-    const read = core.read(text, kind);
-    if (read.problem !== undefined) return { problem: read.problem };
-    const value = /** @type {number} */ (read.value);
-    if (typeof read.low === "number" && typeof read.high === "number") {
-      return { value: { value, low: read.low, high: read.high } };
-    }
-    return { value };
-  },
-
-  /** @param {HTMLElement} element @param {HTMLInputElement} input */
-  typed(element, input) {
-    const path = /** @type {string} */ (input.dataset["path"]);
-    const meant = fields.meant(element, input.value, path);
-    fields.in(element, ".source").textContent = "";
-    model.change(
-      () => {
-        if (meant.problem !== undefined) {
-          model.drafts.set(path, input.value);
-          return;
-        }
-        model.drafts.delete(path);
-        const setting = () => model.set(path, meant.value);
-        if (path.endsWith("/name")) model.renaming(setting);
-        else setting();
-      },
-      { typing: path },
-    );
-    fields.understand(element, input);
-  },
-
-  /** Shows beside the field what was understood, where that reads differently. @param {HTMLElement} element @param {HTMLInputElement} input */
-  understand(element, input) {
-    const path = /** @type {string} */ (input.dataset["path"]);
-    const draft = model.drafts.get(path);
-    const line = fields.in(element, ".understood");
-    line.textContent = "";
-    if (draft !== undefined) {
-      fields.complain(input, fields.meant(element, draft, path).problem ?? "");
+  bindBox(box, path) {
+    box.dataset["path"] = path;
+    if (box.dataset["optional"] && scenario.get(path) === undefined) {
+      fields.offer(box, path, box.dataset["optional"], "");
       return;
     }
-    const written = fields.written(element, path);
-    const same = (/** @type {string} */ text) => text.replaceAll(/\s/g, "");
-    const typed = same(input.value);
-    // The bare number of a shown unit is understood as it stands.
-    const bare =
-      typed !== "" && same(written).startsWith(typed) && /[0-9]$/.test(typed);
-    if (typed !== "" && typed !== same(written) && !bare)
-      line.textContent = `understood as ${written}`;
-  },
-
-  /** @param {KeyboardEvent} event @param {HTMLElement} element @param {HTMLInputElement} input */
-  stepped(event, element, input) {
-    if (event.key !== "ArrowUp" && event.key !== "ArrowDown") return;
-    const kind = element.dataset["kind"];
-    if (kind === undefined) return;
-    const next = wasm_bindgen.step_quantity(
-      input.value,
-      kind,
-      core.us,
-      event.key === "ArrowUp",
-      event.shiftKey,
-    );
-    if (next === undefined) return;
-    event.preventDefault();
-    input.value = next;
-    fields.typed(element, input);
-  },
-
-  /** @param {HTMLInputElement} input @param {string} words */
-  complain(input, words) {
-    const line = document.getElementById(`${input.id}-problem`);
-    if (line) line.textContent = words;
-    if (words === "") input.removeAttribute("aria-invalid");
-    else input.setAttribute("aria-invalid", "true");
+    const field = fields.add(box, path);
+    if (box.dataset["optional"]) box.append(fields.leaveOut(field.label, path));
+    if (field.control instanceof HTMLSelectElement) fields.bindChoice(field);
+    else if (box.dataset["kind"] === "text")
+      fields.bindText(field, field.control);
+    else fields.bindQuantity(field, field.control);
   },
 
   /**
-   * Puts each problem at the field it belongs to; gives back what found none.
-   * @param {Problem[]} problems
-   * @returns {Problem[]}
+   * A button in the place of something that is only there when asked for.
+   * @param {HTMLElement} box
+   * @param {string} path
+   * @param {string} words
+   * @param {Json} first what stands there once it is asked for
    */
-  place(problems) {
-    const inputs = /** @type {HTMLInputElement[]} */ ([
-      ...document.querySelectorAll("input[data-path]"),
-    ]);
-    const left = new Set(problems);
-    for (const input of inputs) {
-      const path = input.dataset["path"];
-      if (path !== undefined && model.drafts.has(path)) continue;
-      const own = problems.filter(
-        (one) => one.path === path || one.path.startsWith(`${path}/`),
+  offer(box, path, words, first) {
+    const ask = () =>
+      scenario.reshape(
+        words.replace("…", ""),
+        path,
+        () => scenario.set(path, first),
+        fields.id(path),
       );
-      const words = own.map((one) =>
-        [one.message, one.hint].filter((part) => part !== "").join(". "),
-      );
-      if (input.closest(".field")) fields.complain(input, words.join("; "));
-      if (input.closest("[hidden]")) continue;
-      for (const one of own) left.delete(one);
-    }
-    return [...left];
+    const button = dom.button(words, ask, "quiet");
+    button.id = `${fields.id(path)}-ask`;
+    box.classList.add("offer");
+    box.replaceChildren(button);
   },
 
-  /** The field nearest to a path. @param {string} path @returns {HTMLElement | null} */
-  nearest(path) {
-    for (let at = path; at !== ""; at = at.slice(0, at.lastIndexOf("/"))) {
-      const found = document.querySelector(`[data-path^="${CSS.escape(at)}"]`);
-      if (found)
-        return found.matches("input, select, button")
-          ? /** @type {HTMLElement} */ (found)
-          : fields.in(found, "input, select, button");
+  /**
+   * @param {string} label
+   * @param {string} path
+   * @returns {HTMLButtonElement}
+   */
+  leaveOut(label, path) {
+    const out = () =>
+      scenario.reshape(
+        `${label} left out`,
+        path,
+        () => scenario.set(path, undefined),
+        `${fields.id(path)}-ask`,
+      );
+    const button = dom.button("×", out, "quiet out");
+    button.setAttribute("aria-label", `Leave out: ${label}`);
+    return button;
+  },
+
+  /**
+   * Names the control, ties label, message and what was understood to it, and remembers it.
+   * @param {HTMLElement} box
+   * @param {string} path
+   * @returns {Field}
+   */
+  add(box, path) {
+    const control = box.querySelector("input, select, textarea");
+    const label = dom.find(box, "label", HTMLLabelElement);
+    if (
+      !(control instanceof HTMLInputElement) &&
+      !(control instanceof HTMLSelectElement) &&
+      !(control instanceof HTMLTextAreaElement)
+    ) {
+      throw new Error(`the field ${path} has no control`);
     }
-    return null;
+    box.dataset["path"] = path;
+    control.id = fields.id(path);
+    label.htmlFor = control.id;
+    const understood = dom.make("span", "", "understood");
+    understood.id = `${control.id}-understood`;
+    const message = dom.make("p", "", "message");
+    message.id = `${control.id}-message`;
+    label.after(understood);
+    box.append(message);
+    control.setAttribute("aria-describedby", `${understood.id} ${message.id}`);
+    const field = {
+      path,
+      box,
+      control,
+      message,
+      trouble: "",
+      label: dom.words(label),
+    };
+    fields.known.set(path, field);
+    return field;
+  },
+
+  /**
+   * A choice between given words.
+   * @param {Field} field
+   */
+  bindChoice(field) {
+    const { control, path, box, label } = field;
+    const value = scenario.get(path);
+    control.value = String(value ?? box.dataset["default"] ?? "");
+    control.addEventListener("change", () =>
+      scenario.reshape(
+        label,
+        path,
+        () => scenario.set(path, control.value),
+        control.id,
+      ),
+    );
+  },
+
+  /**
+   * Plain words; empty is the same as not there.
+   * @param {Field} field
+   * @param {HTMLInputElement | HTMLTextAreaElement} control
+   */
+  bindText(field, control) {
+    const value = scenario.get(field.path);
+    control.value = value === undefined ? "" : String(value);
+    control.addEventListener("input", () =>
+      scenario.type(
+        field.path,
+        control.value === "" ? undefined : control.value,
+        field.label,
+      ),
+    );
+  },
+
+  /**
+   * A quantity, written as on paper.
+   * @param {Field} field
+   * @param {HTMLInputElement | HTMLTextAreaElement} control
+   */
+  bindQuantity(field, control) {
+    control.spellcheck = false;
+    control.autocomplete = "off";
+    control.setAttribute("autocapitalize", "off");
+    fields.show(field);
+    control.addEventListener("input", () => fields.take(field));
+    control.addEventListener("keydown", (event) => {
+      if (event instanceof KeyboardEvent) fields.stepKey(field, event);
+    });
+    if (field.box.dataset["words"]) everyday.offer(field);
+  },
+
+  /**
+   * Shows the value of the scenario: as it was typed where that is still it, else as the core writes it.
+   * @param {Field} field
+   */
+  show(field) {
+    const value = scenario.get(field.path);
+    const raw = fields.raw(value);
+    const typed = fields.typed.get(field.path);
+    if (raw !== undefined) field.control.value = raw;
+    else if (typed !== undefined && pointer.same(typed.value, value))
+      field.control.value = typed.text;
+    else
+      field.control.value =
+        value === undefined
+          ? ""
+          : core.write(value, field.box.dataset["kind"] ?? "");
+    fields.understand(field);
+  },
+
+  /**
+   * The text of a value that could not be read.
+   * @param {Json | undefined} value
+   * @returns {string | undefined}
+   */
+  raw(value) {
+    if (typeof value === "string") return value;
+    if (pointer.isObject(value) && typeof value["at_s"] === "string")
+      return value["at_s"];
+    return undefined;
+  },
+
+  /**
+   * Takes what was typed into the scenario.
+   * @param {Field} field
+   */
+  take(field) {
+    const reading = fields.understand(field);
+    const text = field.control.value;
+    const old = scenario.get(field.path);
+    /** @type {Json} */
+    let value = text.trim() === "" ? "" : text;
+    if (reading !== null && "written" in reading) value = reading.written;
+    // A table keeps what stands beside its points.
+    if (pointer.isObject(old) && "at_s" in old) {
+      value = pointer.isObject(value)
+        ? { ...old, ...value }
+        : { ...old, at_s: value };
+    }
+    fields.typed.set(field.path, { text, value });
+    everyday.match(field, value);
+    scenario.type(field.path, value, field.label);
+  },
+
+  /**
+   * Reads the text of a field; says beside it what was understood where that differs, else why it was not.
+   * @param {Field} field
+   * @returns {Reading | null} null for an empty field
+   */
+  understand(field) {
+    const text = field.control.value;
+    const kind = field.box.dataset["kind"] ?? "";
+    const reading = text.trim() === "" ? null : core.read(text, kind);
+    field.trouble =
+      reading !== null && "message" in reading ? reading.message : "";
+    const note = dom.find(field.box, ".understood", HTMLElement);
+    note.textContent = fields.understood(field, reading);
+    return reading;
+  },
+
+  /**
+   * What was understood, where that differs from what is written.
+   * @param {Field} field
+   * @param {Reading | null} reading
+   * @returns {string}
+   */
+  understood(field, reading) {
+    if (reading === null || "message" in reading) return "";
+    const { written, understood } = reading;
+    if (field.box.dataset["moment"] !== undefined && Number(written) > 0) {
+      const moment = core.ask((page) => page.moment(Number(written)), null);
+      if (moment?.iso) return moment.words;
+    }
+    const plain = (/** @type {string} */ said) =>
+      said.replace(/\s+/g, "").replaceAll("−", "-");
+    const same = plain(understood) === plain(field.control.value);
+    return same ? "" : `= ${understood}`;
+  },
+
+  /**
+   * The arrow keys step a number.
+   * @param {Field} field
+   * @param {KeyboardEvent} event
+   */
+  stepKey(field, event) {
+    const up = event.key === "ArrowUp" || event.key === "PageUp";
+    if (!up && event.key !== "ArrowDown" && event.key !== "PageDown") return;
+    if (event.ctrlKey || event.metaKey || event.altKey) return;
+    const large = event.shiftKey || event.key.startsWith("Page");
+    const stepped = core.step(
+      field.control.value,
+      field.box.dataset["kind"] ?? "",
+      up,
+      large,
+    );
+    if (stepped === undefined) return;
+    event.preventDefault();
+    field.control.value = stepped;
+    fields.take(field);
   },
 };

@@ -1,163 +1,171 @@
 "use strict";
 
-/** Open, save, drop, examples; and what is remembered between visits. */
+/** Opening and saving: files stay between the user and the browser. */
 const files = {
-  /** @type {Example[]} */
-  examples: [],
-
-  /** An item about which little is said yet. @returns {Scenario} */
-  empty() {
-    return {
-      stillheat: 1,
-      item: { shape: "cylinder", layers: [{ material: "water" }] },
-      start: { uniform_c: 80 },
-      surroundings: {
-        outer: [
-          {
-            temperature_c: 20,
-            film_w_per_m2_k: { value: 7, low: 5, high: 10 },
-          },
-        ],
-      },
-      ready_when: [],
-    };
+  /** What a new description begins with: what is needed, still to be filled in. @type {Json} */
+  empty: {
+    stillheat: 1,
+    item: { shape: "cylinder", layers: [{ material: "", thickness_m: "" }] },
+    start: { uniform_c: "" },
+    surroundings: { outer: [{ temperature_c: "", film_w_per_m2_k: "" }] },
+    ready_when: [{ what: "hottest", below_c: "" }],
   },
 
-  /** @param {string} text @param {string} name */
-  take(text, name) {
-    let scenario;
+  /**
+   * Opens the text of a file, unless it is no scenario at all; then what is on the page stays.
+   * @param {string} text
+   * @param {string} name
+   */
+  open(text, name) {
+    const solution = core.solve(text);
+    const textual = (solution?.problems ?? []).filter(
+      ({ kind }) => kind === "text",
+    );
+    const tree = files.parse(text);
+    if (textual.length > 0 || !pointer.isObject(tree)) {
+      const why = textual
+        .map(({ message, hint }) => `${message}. ${hint}`.trim())
+        .join(" ");
+      files.say(
+        `${name} was not opened: ${why || "it is no scenario."} What was on the page is still there.`,
+      );
+      return;
+    }
+    files.say("");
+    answer.forget();
+    scenario.replace(tree, text, `${name} opened`);
+    announce.now(`${name} opened`);
+  },
+
+  /**
+   * @param {string} text
+   * @returns {Json | undefined}
+   */
+  parse(text) {
     try {
-      scenario = JSON.parse(text);
+      return JSON.parse(text);
     } catch {
-      scenario = null;
+      return undefined;
     }
-    const item = scenario?.item;
-    const shaped =
-      scenario !== null &&
-      typeof scenario === "object" &&
-      scenario.stillheat !== undefined &&
-      Array.isArray(item?.layers);
-    if (!shaped) {
-      const problem = core.page.solve(text).problems[0];
-      const words = problem
-        ? `${problem.path} ${problem.message}. ${problem.hint}`
-        : "this is no scenario";
-      answer.text("announce", `${name} was not opened: ${words}`);
-      const place = /** @type {HTMLElement} */ (
-        document.getElementById("answer-problems")
-      );
-      place.hidden = false;
-      place.replaceChildren(
-        answer.paragraph(`${name} was not opened: ${words}`),
-      );
-      return;
-    }
-    model.replace(scenario);
   },
 
-  /** @param {File} file */
-  async read(file) {
-    if (file.size > 1_000_000) {
-      files.take("", file.name);
+  /**
+   * A notice above the page; empty takes it away.
+   * @param {string} words
+   */
+  say(words) {
+    dom.byId("notice", HTMLElement).hidden = words === "";
+    dom.byId("notice-words", HTMLElement).textContent = words;
+  },
+
+  /** @param {File | undefined} file */
+  async take(file) {
+    if (file === undefined) return;
+    const most = core.ask((_, door) => door.most_bytes(), 0);
+    if (file.size > most) {
+      files.say(
+        `${file.name} was not opened: it has ${file.size} bytes; at most ${most} are taken.`,
+      );
       return;
     }
-    files.take(await file.text(), file.name);
+    files.open(await file.text(), file.name);
   },
 
   save() {
-    const text = `${JSON.stringify(model.scenario, null, 2)}\n`;
-    const title = String(model.get("/title") ?? "");
-    const name =
-      title
-        .toLowerCase()
-        .replaceAll(/[^a-z0-9]+/g, "-")
-        .replaceAll(/^-+|-+$/g, "") || "stillheat";
-    const link = document.createElement("a");
-    link.href = URL.createObjectURL(
-      new Blob([text], { type: "application/json" }),
-    );
-    link.download = `${name}.json`;
+    const blob = new Blob([scenario.text()], { type: "application/json" });
+    const link = dom.make("a");
+    link.href = URL.createObjectURL(blob);
+    link.download = `${files.fileName()}.json`;
     link.click();
-    URL.revokeObjectURL(link.href);
+    // The download has its own hold on the data soon after.
+    setTimeout(() => URL.revokeObjectURL(link.href), 10_000);
+    announce.now(`Saved as ${link.download}`);
   },
 
-  /** Remembers the state, where the browser allows it. */
-  keep() {
-    try {
-      const kept = {
-        scenario: model.scenario,
-        drafts: Object.fromEntries(model.drafts),
-        us: core.us,
-      };
-      localStorage.setItem("stillheat", JSON.stringify(kept));
-    } catch {
-      // Not allowed here: the page works without.
-    }
+  /** @returns {string} the title, as far as it can be the name of a file */
+  fileName() {
+    const title = String(scenario.get("/title") ?? "");
+    const name = title
+      .replace(/[^\p{L}\p{N}]+/gu, "-")
+      .replace(/^-+|-+$/g, "")
+      .slice(0, 60);
+    return name === "" ? "scenario" : name.toLowerCase();
   },
 
-  /** @returns {Kept | null} */
-  kept() {
-    try {
-      const kept = JSON.parse(localStorage.getItem("stillheat") ?? "null");
-      return kept && Array.isArray(kept.scenario?.item?.layers) ? kept : null;
-    } catch {
-      return null;
-    }
+  startNew() {
+    files.say("");
+    answer.forget();
+    scenario.replace(files.empty, null, "New description");
+    document.getElementById(fields.id("/item/shape"))?.focus();
+  },
+
+  /** @returns {Example[]} */
+  examples() {
+    return core.ask((_, door) => door.examples(), []);
+  },
+
+  showExamples() {
+    const dialog = dom.byId("examples-dialog", HTMLDialogElement);
+    const rows = files.examples().map(({ title, about, text }) => {
+      const row = dom.make("li");
+      const pick = dom.button(title, () => {
+        dialog.close();
+        files.open(text, title);
+      });
+      row.append(pick, dom.make("p", about, "note"));
+      return row;
+    });
+    dom.byId("examples-list", HTMLElement).replaceChildren(...rows);
+    dialog.showModal();
+  },
+
+  /** @param {KeyboardEvent} event */
+  key(event) {
+    if (!(event.ctrlKey || event.metaKey) || event.altKey || event.shiftKey)
+      return;
+    const key = event.key.toLowerCase();
+    if (key !== "s" && key !== "o") return;
+    event.preventDefault();
+    if (key === "s") files.save();
+    else dom.byId("file", HTMLInputElement).click();
   },
 
   listen() {
-    const input = /** @type {HTMLInputElement} */ (
-      document.getElementById("file")
-    );
-    document
-      .getElementById("open")
-      ?.addEventListener("click", () => input.click());
+    const input = dom.byId("file", HTMLInputElement);
+    const press = (/** @type {string} */ id, /** @type {() => void} */ act) =>
+      dom.byId(id, HTMLButtonElement).addEventListener("click", act);
+    press("open", () => input.click());
+    press("save", files.save);
+    press("new", files.startNew);
+    press("examples", files.showExamples);
+    press("notice-close", () => files.say(""));
     input.addEventListener("change", () => {
-      const file = input.files?.[0];
+      void files.take(input.files?.[0]);
+      // The same file can be opened again.
       input.value = "";
-      if (file) void files.read(file);
     });
-    document
-      .getElementById("save")
-      ?.addEventListener("click", () => files.save());
-    document
-      .getElementById("print")
-      ?.addEventListener("click", () => window.print());
-    document.getElementById("new")?.addEventListener("click", () => {
-      model.replace(files.empty());
-      document.getElementById("shape")?.focus();
-    });
-    files.drop();
-    files.listExamples();
+    document.addEventListener("keydown", files.key);
+    files.listenToDrops();
   },
 
-  listExamples() {
-    const select = /** @type {HTMLSelectElement} */ (
-      document.getElementById("examples")
-    );
-    files.examples = wasm_bindgen.examples();
-    for (const example of files.examples)
-      select.append(new Option(example.title, example.id));
-    select.addEventListener("change", () => {
-      const example = files.examples.find((one) => one.id === select.value);
-      select.value = "";
-      if (example) files.take(example.text, example.title);
-    });
-  },
-
-  drop() {
-    document.addEventListener("dragover", (event) => {
+  /** A file may be dropped anywhere on the page. */
+  listenToDrops() {
+    const sign = dom.byId("drop", HTMLElement);
+    const carries = (/** @type {DragEvent} */ event) =>
+      event.dataTransfer?.types.includes("Files") ?? false;
+    window.addEventListener("dragover", (event) => {
+      if (!carries(event)) return;
       event.preventDefault();
-      document.body.classList.add("dropping");
+      sign.hidden = false;
     });
-    document.addEventListener("dragleave", (event) => {
-      if (!event.relatedTarget) document.body.classList.remove("dropping");
+    window.addEventListener("dragleave", (event) => {
+      if (event.relatedTarget === null) sign.hidden = true;
     });
-    document.addEventListener("drop", (event) => {
+    window.addEventListener("drop", (event) => {
+      sign.hidden = true;
+      if (!carries(event)) return;
       event.preventDefault();
-      document.body.classList.remove("dropping");
-      const file = event.dataTransfer?.files[0];
-      if (file) void files.read(file);
+      void files.take(event.dataTransfer?.files[0]);
     });
   },
 };

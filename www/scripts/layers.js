@@ -1,321 +1,304 @@
 "use strict";
 
-/** What the item is made of, from the inside out. */
+/** The layers of the item, from the inside out. */
 const layers = {
-  colours: ["#8fb4c6", "#8b9299", "#d3bf8b", "#b58b72", "#a5b693", "#b9a0bd"],
+  path: "/item/layers",
+
+  /** The choice of no material of the library. */
+  own: "own",
+
+  properties: [
+    "density_kg_per_m3",
+    "heat_capacity_j_per_kg_k",
+    "conductivity_w_per_m_k",
+  ],
 
   render() {
-    const shape = /** @type {HTMLSelectElement} */ (
-      document.getElementById("shape")
+    const list = scenario.list(layers.path);
+    dom
+      .byId("layers", HTMLElement)
+      .replaceChildren(...list.map((_, i) => layers.block(i, list.length)));
+    const solid = !layers.isHollow();
+    const shape = scenario.get("/item/shape");
+    dom.byId("hollow", HTMLElement).hidden =
+      shape === "slab" && scenario.get("/item/inner_radius_m") === undefined;
+    dom.byId("order", HTMLElement).textContent =
+      solid && list.length > 0
+        ? "From the inside out; the thickness of the first is its radius."
+        : "From the inside out.";
+  },
+
+  /** @returns {boolean} does it begin at a face, and not at an axis or a centre? */
+  isHollow() {
+    if (scenario.get("/item/shape") === "slab") return true;
+    const radius = scenario.get("/item/inner_radius_m");
+    return radius !== undefined && radius !== 0;
+  },
+
+  /** @returns {string[]} what the layers are called, from the inside out */
+  names() {
+    return core.ask(
+      (_, door) => door.layer_names(JSON.stringify(scenario.list(layers.path))),
+      [],
     );
-    shape.value = model.get("/item/shape") ?? "slab";
-    layers.renderHollow();
-    const hints = {
-      slab: "From the inside out. A side without surroundings counts as insulated.",
-      cylinder: "From the axis out; the first layer's thickness is its radius.",
-      sphere: "From the centre out; the first layer's thickness is its radius.",
+  },
+
+  /**
+   * @param {number} i
+   * @param {number} count
+   * @returns {DocumentFragment}
+   */
+  block(i, count) {
+    const base = pointer.join(layers.path, i);
+    const block = dom.copy("layer-template");
+    const material = layers.bindMaterial(block, base);
+    layers.keepWanted(block, base, i, material);
+    fields.bind(block, base);
+    layers.collectOffers(block);
+    layers.bindMoves(block, i, count);
+    dom.find(block, ".more .source", HTMLElement).textContent =
+      layers.about(material);
+    dom.find(block, ".more", HTMLElement).id = `more${base}`;
+    layers.bindName(block, i);
+    return block;
+  },
+
+  /**
+   * A layer is called by its name at once, and conditions go on speaking of it.
+   * @param {DocumentFragment} block
+   * @param {number} i
+   */
+  bindName(block, i) {
+    const legend = dom.find(block, "legend", HTMLElement);
+    const summary = dom.find(block, "summary", HTMLElement);
+    const path = pointer.join(layers.path, i, "name");
+    const show = () => {
+      const own = String(scenario.get(path) ?? "");
+      const before = dom.make("span", "Layer ", "unseen");
+      const after = dom.make("span", own === "" ? "" : `, ${own}`, "unseen");
+      legend.replaceChildren(before, String(i + 1), after);
+      summary.textContent = own === "" ? "More" : own;
     };
-    const hint = /** @type {HTMLElement} */ (
-      document.getElementById("layers-hint")
-    );
-    hint.textContent =
-      model.hasInnerFace() && shape.value !== "slab"
-        ? "From the hollow out."
-        : hints[/** @type {"slab"} */ (shape.value)];
-    const list = /** @type {HTMLElement} */ (document.getElementById("layers"));
-    const all = model.get("/item/layers") ?? [];
-    list.replaceChildren(
-      .../** @type {any[]} */ (all).map((_, i) => layers.one(i, all.length)),
-    );
-  },
-
-  renderHollow() {
-    const place = /** @type {HTMLElement} */ (
-      document.getElementById("hollow")
-    );
-    place.replaceChildren();
-    if (model.get("/item/shape") === "slab") return;
-    const button = document.createElement("button");
-    button.type = "button";
-    const radius = model.get("/item/inner_radius_m");
-    if (radius === undefined) {
-      button.id = "make-hollow";
-      button.textContent = "It is hollow…";
-      button.addEventListener("click", () => {
-        model.change(() => model.set("/item/inner_radius_m", 0.1), {
-          structure: true,
-        });
-        document.getElementById(fields.id("/item/inner_radius_m"))?.focus();
-      });
-      place.append(button);
-      return;
-    }
-    const field = document.createElement("div");
-    field.className = "field";
-    field.dataset["field"] = "/item/inner_radius_m";
-    field.dataset["kind"] = "length";
-    const label = document.createElement("label");
-    label.textContent = "Inner radius";
-    field.append(label);
-    place.append(field);
-    fields.mount(place, "/item");
-    button.id = "make-solid";
-    button.textContent = "It is solid";
-    button.addEventListener("click", () => {
-      model.change(
-        () => {
-          model.set("/item/inner_radius_m", undefined);
-          model.set("/surroundings/inner", undefined);
-          model.forget("/item/inner_radius_m");
-        },
-        { structure: true },
-      );
+    let name = layers.names()[i];
+    show();
+    fields.known.get(path)?.control.addEventListener("input", () => {
+      const now = layers.names()[i] ?? "";
+      conditions.rename(new Map([[name, now]]));
+      name = now;
+      show();
+      start.render();
+      conditions.render();
     });
-    place.append(button);
   },
 
-  /** @param {number} i @param {number} count @returns {HTMLElement} */
-  one(i, count) {
-    const path = `/item/layers/${i}`;
-    const layer = model.get(path);
-    const element = fields.clone("layer-template");
-    element.dataset["path"] = path;
-    element.setAttribute("aria-label", `Layer ${i + 1}: ${model.layerName(i)}`);
-    fields.in(element, ".swatch").style.background =
-      layers.colours[i % layers.colours.length];
-    layers.materialSelect(fields.in(element, ".material"), path);
-    layers.moves(element, i, count);
-    layers.motion(element, path, layer);
-    const material = core.materials.find((one) => one.id === layer.material);
-    const own = [
-      "density_kg_per_m3",
-      "heat_capacity_j_per_kg_k",
-      "conductivity_w_per_m_k",
-    ];
-    const some = own.some(
-      (key) => layer[key] !== undefined || model.drafts.has(`${path}/${key}`),
+  /**
+   * @param {Material | undefined} material
+   * @returns {string} where its properties come from
+   */
+  about(material) {
+    return material === undefined
+      ? ""
+      : `Properties: ${material.source}. ${material.notes}`.trim();
+  },
+
+  /**
+   * @param {DocumentFragment} block
+   * @param {string} base
+   * @returns {Material | undefined}
+   */
+  bindMaterial(block, base) {
+    const path = pointer.join(base, "material");
+    const field = fields.add(
+      dom.find(block, '[data-kind="material"]', HTMLElement),
+      path,
     );
-    fields.in(element, ".own").hidden = material !== undefined && !some;
-    fields.in(element, ".own-again").hidden = material === undefined || some;
-    if (material)
-      for (const field of element.querySelectorAll(".own .field"))
-        /** @type {HTMLElement} */ (field).dataset["optional"] =
-          "from the library";
-    fields.in(element, ".make-own").addEventListener("click", () => {
-      fields.in(element, ".own").hidden = false;
-      fields.in(element, ".own-again").hidden = true;
-      fields.in(element, ".own input").focus();
-    });
-    fields.in(element, ".contact-field").hidden =
-      i === 0 && layer.contact_m2_k_per_w === undefined;
-    fields.in(element, ".layer-more").open =
-      layer.name !== undefined || layer.contact_m2_k_per_w !== undefined;
-    fields.in(element, '[data-field="name"]').dataset["optional"] =
-      model.layerName(i);
-    fields.label(element, path);
-    fields.mount(element, path);
-    return element;
-  },
-
-  /** @param {HTMLSelectElement} select @param {string} path */
-  materialSelect(select, path) {
-    select.append(new Option("Own properties", ""));
+    const select = dom.find(field.box, "select", HTMLSelectElement);
     /** @type {Map<string, HTMLOptGroupElement>} */
     const groups = new Map();
-    for (const material of core.materials) {
-      let group = groups.get(material.group);
-      if (!group) {
-        group = document.createElement("optgroup");
-        group.label = material.group;
-        groups.set(material.group, group);
-        select.append(group);
+    for (const { id, name, group } of core.materials()) {
+      const kept = groups.get(group) ?? document.createElement("optgroup");
+      kept.label = group;
+      kept.append(new Option(name, id));
+      groups.set(group, kept);
+    }
+    select.append(...groups.values());
+    const written = scenario.get(path);
+    select.value = String(written ?? layers.own);
+    select.addEventListener("change", () => layers.choose(base, select.value));
+    return core.materials().find(({ id }) => id === written);
+  },
+
+  /**
+   * Another material; its own properties make room, and a liquid mixes itself until told otherwise.
+   * @param {string} base
+   * @param {string} id
+   */
+  choose(base, id) {
+    const path = pointer.join(base, "material");
+    const change = () => {
+      const liquid =
+        core.materials().find((material) => material.id === id)?.liquid ??
+        false;
+      scenario.set(path, id === layers.own ? undefined : id);
+      for (const key of layers.properties) {
+        const at = pointer.join(base, key);
+        if (id !== layers.own) scenario.set(at, undefined);
+        else if (scenario.get(at) === undefined) scenario.set(at, "");
       }
-      group.append(new Option(material.name, material.id));
+      if (id !== layers.own && !liquid) {
+        scenario.set(pointer.join(base, "motion"), undefined);
+        scenario.set(pointer.join(base, "inside_film_w_per_m2_k"), undefined);
+      }
+    };
+    layers.reshape("Material", path, change, fields.id(path));
+  },
+
+  /**
+   * A change that may rename layers: conditions go on speaking of the same ones.
+   * @param {string} label
+   * @param {string} path
+   * @param {() => void} change
+   * @param {string} [focus]
+   * @param {(i: number) => number} [moved] where layer i is afterwards
+   */
+  reshape(label, path, change, focus, moved = (i) => i) {
+    const before = layers.names();
+    const follow = () => {
+      change();
+      const after = layers.names();
+      /** @type {Map<Json | undefined, string>} */
+      const renamed = new Map();
+      for (const [i, name] of before.entries())
+        renamed.set(name, after[moved(i)] ?? name);
+      conditions.rename(renamed);
+    };
+    scenario.reshape(label, path, follow, focus);
+  },
+
+  /**
+   * Takes away the fields that say nothing about this layer.
+   * @param {DocumentFragment} block
+   * @param {string} base
+   * @param {number} i
+   * @param {Material | undefined} material
+   */
+  keepWanted(block, base, i, material) {
+    const has = (/** @type {string} */ key) =>
+      scenario.get(pointer.join(base, key)) !== undefined;
+    const drop = (/** @type {string} */ selector) =>
+      dom.find(block, selector, HTMLElement).remove();
+    const own = layers.properties.some(has);
+    if (!own) drop(".properties-note");
+    if (!has("material")) {
+      for (const key of layers.properties)
+        delete dom.find(block, `[data-at="${key}"]`, HTMLElement).dataset[
+          "optional"
+        ];
     }
-    const id = model.get(`${path}/material`) ?? "";
-    if (id !== "" && !core.materials.some((one) => one.id === id))
-      select.append(new Option(`${id} (not known)`, id));
-    select.value = id;
-    select.dataset["path"] = `${path}/material`;
-    select.addEventListener("change", () => {
-      model.change(
-        () =>
-          model.renaming(() => {
-            model.set(
-              `${path}/material`,
-              select.value === "" ? undefined : select.value,
-            );
-            const liquid =
-              core.materials.find((one) => one.id === select.value)?.liquid ??
-              false;
-            if (select.value !== "" && !liquid) {
-              model.set(`${path}/motion`, undefined);
-              model.set(`${path}/inside_film_w_per_m2_k`, undefined);
-            }
-            if (select.value !== "") {
-              for (const key of [
-                "density_kg_per_m3",
-                "heat_capacity_j_per_kg_k",
-                "conductivity_w_per_m_k",
-              ]) {
-                model.set(`${path}/${key}`, undefined);
-                model.forget(`${path}/${key}`);
-              }
-            }
-          }),
-        { structure: true },
-      );
-    });
+    const moves =
+      has("motion") && scenario.get(pointer.join(base, "motion")) !== "still";
+    if (!has("motion") && material !== undefined && !material.liquid)
+      drop('[data-at="motion"]');
+    if (!moves && !has("inside_film_w_per_m2_k"))
+      drop('[data-at="inside_film_w_per_m2_k"]');
+    if (i === 0 && !has("contact_m2_k_per_w"))
+      drop('[data-at="contact_m2_k_per_w"]');
   },
 
-  /** @param {HTMLElement} element @param {string} path @param {any} layer */
-  motion(element, path, layer) {
-    const select = fields.in(element, ".motion");
-    const moves = layer.motion !== undefined && layer.motion !== "still";
-    const material = core.materials.find((one) => one.id === layer.material);
-    fields.in(element, ".motion-row").hidden = !(
-      moves ||
-      material === undefined ||
-      material.liquid
+  /**
+   * What can be asked for stands together under "More".
+   * @param {DocumentFragment} block
+   */
+  collectOffers(block) {
+    const asks = dom.find(block, "div.asks", HTMLElement);
+    asks.append(...dom.all(block, ".field.offer"));
+  },
+
+  /**
+   * @param {DocumentFragment} block
+   * @param {number} i
+   * @param {number} count
+   */
+  bindMoves(block, i, count) {
+    const move = (/** @type {string} */ way, /** @type {number} */ to) => {
+      const button = dom.find(block, `[data-move="${way}"]`, HTMLButtonElement);
+      button.id = `${way}${pointer.join(layers.path, i)}`;
+      button.disabled = to < 0 || to >= count;
+      button.addEventListener("click", () => layers.move(i, to));
+    };
+    move("in", i - 1);
+    move("out", i + 1);
+    const remove = dom.find(block, "[data-remove]", HTMLButtonElement);
+    remove.disabled = count < 2;
+    remove.addEventListener("click", () => layers.remove(i));
+    const insert = dom.find(block, "[data-insert]", HTMLButtonElement);
+    insert.addEventListener("click", () => layers.insert(i));
+  },
+
+  /**
+   * @param {number} from
+   * @param {number} to
+   */
+  move(from, to) {
+    const change = () => {
+      const list = [...scenario.list(layers.path)];
+      list.splice(to, 0, ...list.splice(from, 1));
+      scenario.set(layers.path, list);
+    };
+    const end = to === 0 || to === scenario.list(layers.path).length - 1;
+    const way = to < from !== end ? "in" : "out";
+    const swapped = (/** @type {number} */ i) =>
+      i === from ? to : i === to ? from : i;
+    form.swapOpen(
+      pointer.join(layers.path, from),
+      pointer.join(layers.path, to),
     );
-    fields.in(element, ".film-field").hidden =
-      !moves && layer.inside_film_w_per_m2_k === undefined;
-    select.value = layer.motion ?? "still";
-    select.dataset["path"] = `${path}/motion`;
-    select.addEventListener("change", () => {
-      model.change(
-        () => {
-          const still = select.value === "still";
-          model.set(`${path}/motion`, still ? undefined : select.value);
-          if (still) {
-            model.set(`${path}/inside_film_w_per_m2_k`, undefined);
-            model.forget(`${path}/inside_film_w_per_m2_k`);
-          } else if (
-            model.get(`${path}/inside_film_w_per_m2_k`) === undefined
-          ) {
-            const choice = wasm_bindgen.choices("inside_film")[0];
-            if (choice)
-              model.set(`${path}/inside_film_w_per_m2_k`, {
-                value: choice.likely,
-                low: choice.low,
-                high: choice.high,
-              });
-          }
-        },
-        { structure: true },
-      );
-    });
-  },
-
-  /** @param {HTMLElement} element @param {number} i @param {number} count */
-  moves(element, i, count) {
-    const name = model.layerName(i);
-    const buttons = /** @type {[string, string, boolean, () => void][]} */ ([
-      [
-        ".inwards",
-        `Move ${name} inwards`,
-        i === 0,
-        () => layers.swap(i, i - 1, "inwards"),
-      ],
-      [
-        ".outwards",
-        `Move ${name} outwards`,
-        i === count - 1,
-        () => layers.swap(i, i + 1, "outwards"),
-      ],
-      [".remove", `Remove ${name}`, count === 1, () => layers.remove(i)],
-    ]);
-    for (const [selector, words, off, act] of buttons) {
-      const button = fields.in(element, selector);
-      button.setAttribute("aria-label", words);
-      button.disabled = off;
-      button.addEventListener("click", act);
-    }
-  },
-
-  /** @param {number} from @param {number} to @param {string} button */
-  swap(from, to, button) {
-    model.change(
-      () => {
-        const all = model.get("/item/layers");
-        [all[from], all[to]] = [all[to], all[from]];
-        delete all[0].contact_m2_k_per_w;
-        const starts = model.get("/start/per_layer_c");
-        if (Array.isArray(starts) && starts.length === all.length)
-          [starts[from], starts[to]] = [starts[to], starts[from]];
-        model.forget("/item/layers");
-      },
-      { structure: true },
+    layers.reshape(
+      "Layer moved",
+      layers.path,
+      change,
+      `${way}${pointer.join(layers.path, to)}`,
+      swapped,
     );
-    const moved = document.querySelectorAll("#layers > .layer")[to];
-    const same = moved && fields.in(moved, `.${button}`);
-    if (same)
-      (same.disabled
-        ? fields.in(moved, ".moves button:not(:disabled)")
-        : same
-      ).focus();
   },
 
   /** @param {number} i */
   remove(i) {
-    model.change(
-      () => {
-        const all = model.get("/item/layers");
-        all.splice(i, 1);
-        delete all[0].contact_m2_k_per_w;
-        const starts = model.get("/start/per_layer_c");
-        if (Array.isArray(starts) && starts.length > all.length)
-          starts.splice(i, 1);
-        model.forget("/item/layers");
-      },
-      { structure: true },
+    const left = scenario.list(layers.path).length - 1;
+    const focus = fields.id(
+      pointer.join(layers.path, Math.min(i, left - 1), "material"),
     );
-    const left = document.querySelectorAll("#layers > .layer");
-    fields
-      .in(
-        left[Math.min(i, left.length - 1)] ?? document,
-        ".material, #add-layer",
-      )
-      .focus();
+    const moved = (/** @type {number} */ was) =>
+      was === i ? -1 : was > i ? was - 1 : was;
+    const change = () => scenario.set(pointer.join(layers.path, i), undefined);
+    layers.reshape("Layer removed", layers.path, change, focus, moved);
   },
 
-  add() {
-    model.change(
-      () => {
-        if (!Array.isArray(model.get("/item/layers")))
-          model.set("/item/layers", []);
-        const all = model.get("/item/layers");
-        all.push({
-          material: all.length === 0 ? "water" : "mineral-wool-pipe",
-        });
-        const starts = model.get("/start/per_layer_c");
-        if (Array.isArray(starts) && starts.length > 0)
-          starts.push(model.copy(starts[starts.length - 1]));
-      },
-      { structure: true },
+  /** @param {number} i number of the new layer */
+  insert(i) {
+    const change = () => {
+      const list = [...scenario.list(layers.path)];
+      list.splice(i, 0, {
+        material: core.materials()[0]?.id ?? "",
+        thickness_m: "",
+      });
+      scenario.set(layers.path, list);
+    };
+    const moved = (/** @type {number} */ was) => (was >= i ? was + 1 : was);
+    layers.reshape(
+      "Layer added",
+      layers.path,
+      change,
+      fields.id(pointer.join(layers.path, i, "material")),
+      moved,
     );
-    fields.in(document, "#layers > .layer:last-child .material").focus();
   },
 
   listen() {
-    document
-      .getElementById("add-layer")
-      ?.addEventListener("click", () => layers.add());
-    const shape = /** @type {HTMLSelectElement} */ (
-      document.getElementById("shape")
-    );
-    shape.dataset["path"] = "/item/shape";
-    shape.addEventListener("change", () => {
-      model.change(
-        () => {
-          model.set("/item/shape", shape.value);
-          if (shape.value === "slab")
-            model.set("/item/inner_radius_m", undefined);
-          if (!model.hasInnerFace())
-            model.set("/surroundings/inner", undefined);
-        },
-        { structure: true },
+    dom
+      .byId("add-layer", HTMLButtonElement)
+      .addEventListener("click", () =>
+        layers.insert(scenario.list(layers.path).length),
       );
-    });
   },
 };

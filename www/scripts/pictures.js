@@ -1,146 +1,241 @@
 "use strict";
 
-/** The pictures: drawn by the core on canvases of the size they have, at one moment. */
+/** The pictures, drawn by the core for the space they have, and the time slider that moves them all. */
 const pictures = {
-  /** Height over width, and the least and the most height, px. @type {{ [name: string]: [number, number, number] }} */
-  shapes: {
-    section: [0.85, 240, 380],
-    curve: [0.62, 240, 380],
-    profile: [0.3, 200, 300],
-  },
-  /** End of what was computed, s. */
+  /** @type {PictureName[]} */
+  names: ["section", "curve", "profile"],
+
+  /** Steps of the slider. */
+  steps: 1000,
+
+  /** Pixels for each of the page's on paper. */
+  paperRatio: 3,
+
+  /** Width and height on paper, in pixels of the page. @type {Record<PictureName, [number, number]>} */
+  paper: { section: [270, 190], curve: [390, 230], profile: [675, 200] },
+
+  /** The time that is shown, s after the stop. */
+  time: 0,
+
+  /** End of what is drawn, s after the stop. */
   end: 0,
-  dark: matchMedia("(prefers-color-scheme: dark)"),
+
+  /** Does the time go with the answer, until somebody moves it? */
+  follows: true,
+
   printing: false,
 
-  /** The moment of the slider, s. */
-  time() {
-    const slider = /** @type {HTMLInputElement} */ (
-      document.getElementById("moment")
-    );
-    return (Number(slider.value) / 1000) * pictures.end;
+  followAnswer() {
+    pictures.follows = true;
   },
 
-  draw() {
-    if (pictures.end <= 0) return;
-    const time = pictures.time();
-    for (const name of Object.keys(pictures.shapes))
-      pictures.drawOne(name, time);
-    const words = core.page.moment_words(time);
-    const slider = /** @type {HTMLInputElement} */ (
-      document.getElementById("moment")
-    );
-    slider.setAttribute("aria-valuetext", words);
-    /** @type {HTMLElement} */ (
-      document.getElementById("moment-words")
-    ).textContent = words;
-  },
-
-  /** @param {string} name @param {number} time */
-  drawOne(name, time) {
-    const canvas = /** @type {HTMLCanvasElement} */ (
-      document.getElementById(name)
-    );
-    const width = Math.max(
-      240,
-      Math.floor(/** @type {HTMLElement} */ (canvas.parentElement).clientWidth),
-    );
-    const [share, least, most] = /** @type {[number, number, number]} */ (
-      pictures.shapes[name]
-    );
-    const height = Math.round(Math.min(most, Math.max(least, share * width)));
-    const ratio = window.devicePixelRatio || 1;
-    const [pixels, lines] = [
-      Math.round(width * ratio),
-      Math.round(height * ratio),
-    ];
-    if (canvas.width !== pixels || canvas.height !== lines) {
-      canvas.width = pixels;
-      canvas.height = lines;
-      canvas.style.height = `${height}px`;
-    }
-    const context = canvas.getContext("2d");
-    if (!context) return;
-    core.page.draw(
-      name,
-      context,
-      width,
-      height,
-      ratio,
-      time,
-      pictures.dark.matches && !pictures.printing,
-      core.us,
-    );
-    const table = core.page.table(name, time, core.us);
-    canvas.setAttribute("aria-label", table.caption);
-    const place = /** @type {HTMLElement} */ (
-      document.getElementById(`${name}-table`)
-    );
-    const details = /** @type {HTMLDetailsElement} */ (place.parentElement);
-    place.replaceChildren(...(details.open ? [pictures.table(table)] : []));
-  },
-
-  /** @param {PictureTable} table @returns {HTMLTableElement} */
-  table(table) {
-    const element = document.createElement("table");
-    element.createCaption().textContent = table.caption;
-    const head = element.createTHead().insertRow();
-    for (const column of table.columns) {
-      const cell = document.createElement("th");
-      cell.scope = "col";
-      cell.textContent = column;
-      head.append(cell);
-    }
-    const body = element.createTBody();
-    for (const row of table.rows) {
-      const line = body.insertRow();
-      for (const text of row) line.insertCell().textContent = text;
-    }
-    return element;
-  },
-
-  /** A new answer: the slider goes to the moment that was asked for. @param {Report} report */
+  /** @param {Report} report */
   show(report) {
-    const fresh = pictures.end === 0;
-    const slider = /** @type {HTMLInputElement} */ (
-      document.getElementById("moment")
-    );
     pictures.end = report.course.end_s;
-    const asked = report.ready?.time_s ?? report.standing?.time_s;
-    if (fresh && asked !== undefined)
-      slider.value = String(Math.round((1000 * asked) / pictures.end));
+    pictures.time = pictures.follows
+      ? pictures.telling(report)
+      : Math.min(pictures.time, pictures.end);
+    pictures.showJumps(report);
+    pictures.move(pictures.time);
+  },
+
+  /**
+   * The moment that tells most: when it is ready, else the first thing that happens, else the end.
+   * @param {Report} report
+   * @returns {number}
+   */
+  telling(report) {
+    const all = [
+      report.ready,
+      report.standing,
+      ...[...report.ready_when, ...report.must_not].map((one) => one.outcome),
+    ];
+    for (const outcome of all)
+      if (outcome?.kind === "at")
+        return Math.min(outcome.time_s, report.course.end_s);
+    return report.course.end_s;
+  },
+
+  /** @param {Report} report */
+  showJumps(report) {
+    /** @type {[string, number][]} */
+    const places = [["The stop", 0]];
+    if (report.ready?.kind === "at")
+      places.push(["Ready", report.ready.time_s]);
+    if (report.standing?.kind === "at")
+      places.push(["Limit reached", report.standing.time_s]);
+    places.push(["The end", pictures.end]);
+    const jump = (/** @type {[string, number]} */ [words, time]) =>
+      dom.button(
+        words,
+        () => {
+          pictures.follows = false;
+          pictures.move(time);
+        },
+        "quiet",
+      );
+    dom.byId("jumps", HTMLElement).replaceChildren(...places.map(jump));
+  },
+
+  /**
+   * Everything to this time.
+   * @param {number} time
+   */
+  move(time) {
+    pictures.time = Math.min(Math.max(time, 0), pictures.end);
+    const moment = core.ask((page) => page.moment(pictures.time), null) ?? {
+      words: "",
+      iso: "",
+    };
+    const slider = dom.byId("time", HTMLInputElement);
+    slider.value = String(
+      pictures.end > 0 ? (pictures.time / pictures.end) * pictures.steps : 0,
+    );
+    slider.setAttribute("aria-valuetext", moment.words);
+    const words = dom.make("time", moment.words);
+    if (moment.iso) words.dateTime = moment.iso;
+    dom.byId("time-words", HTMLOutputElement).replaceChildren(words);
+    pictures.draw();
+  },
+
+  /** All pictures anew. */
+  draw() {
+    if (answer.report === null) return;
+    for (const name of pictures.names) {
+      const figure = pictures.figure(name);
+      pictures.drawOn(dom.find(figure, "canvas", HTMLCanvasElement), name);
+      pictures.showTable(figure, name);
+    }
+    const sketch = dom.byId("sketch", HTMLCanvasElement);
+    if (sketch.clientWidth > 0 && !pictures.printing)
+      pictures.drawOn(sketch, "section");
+  },
+
+  /**
+   * @param {PictureName} name
+   * @returns {HTMLElement}
+   */
+  figure(name) {
+    return dom.find(document, `[data-picture="${name}"]`, HTMLElement);
+  },
+
+  /**
+   * @param {HTMLCanvasElement} canvas
+   * @param {PictureName} name
+   */
+  drawOn(canvas, name) {
+    const [paperWidth, paperHeight] = pictures.paper[name];
+    const width = pictures.printing ? paperWidth : canvas.clientWidth;
+    const height = pictures.printing ? paperHeight : canvas.clientHeight;
+    const ratio = pictures.printing
+      ? pictures.paperRatio
+      : window.devicePixelRatio;
+    const context = canvas.getContext("2d");
+    if (width === 0 || height === 0 || context === null) return;
+    canvas.width = Math.round(width * ratio);
+    canvas.height = Math.round(height * ratio);
+    const draw = (/** @type {Page} */ page) =>
+      page.draw(
+        name,
+        context,
+        width,
+        height,
+        ratio,
+        pictures.time,
+        pictures.theme(),
+        store.system,
+      );
+    core.ask(draw, undefined);
+  },
+
+  /** @returns {Theme} */
+  theme() {
+    if (pictures.printing) return "print";
+    return matchMedia("(prefers-color-scheme: dark)").matches
+      ? "dark"
+      : "light";
+  },
+
+  /**
+   * The same numbers for those who cannot see the picture; only made when they are looked at.
+   * @param {HTMLElement} figure
+   * @param {PictureName} name
+   */
+  showTable(figure, name) {
+    /** @type {NumberTable} */
+    const empty = { caption: "", columns: [], rows: [] };
+    const { caption, columns, rows } =
+      core.ask((page) => page.table(name, pictures.time, store.system), null) ??
+      empty;
+    dom
+      .find(figure, "canvas", HTMLCanvasElement)
+      .setAttribute("aria-label", caption);
+    if (!dom.find(figure, "details", HTMLDetailsElement).open) return;
+    const head = dom.make("tr");
+    head.append(
+      ...columns.map((words) =>
+        Object.assign(dom.make("th", words), { scope: "col" }),
+      ),
+    );
+    const body = rows.map((cells) => {
+      const row = dom.make("tr");
+      row.append(...cells.map((words) => dom.make("td", words)));
+      return row;
+    });
+    const table = dom.find(figure, "table", HTMLTableElement);
+    const thead = dom.make("thead");
+    thead.append(head);
+    const tbody = dom.make("tbody");
+    tbody.append(...body);
+    table.replaceChildren(dom.make("caption", caption), thead, tbody);
+  },
+
+  /** The pixels of the screen changed: another screen, or another zoom. */
+  watchRatio() {
+    const query = matchMedia(`(resolution: ${window.devicePixelRatio}dppx)`);
+    const changed = () => {
+      pictures.draw();
+      pictures.watchRatio();
+    };
+    query.addEventListener("change", changed, { once: true });
+  },
+
+  /** @param {boolean} onPaper */
+  print(onPaper) {
+    pictures.printing = onPaper;
+    for (const name of pictures.names) {
+      const { style } = dom.find(
+        pictures.figure(name),
+        "canvas",
+        HTMLCanvasElement,
+      );
+      const [width, height] = pictures.paper[name];
+      style.width = onPaper ? `${width}px` : "";
+      style.height = onPaper ? `${height}px` : "";
+    }
     pictures.draw();
   },
 
   listen() {
-    const again = () => pictures.draw();
-    document.getElementById("moment")?.addEventListener("input", again);
-    for (const details of document.querySelectorAll("figure details"))
-      details.addEventListener("toggle", again);
-    pictures.dark.addEventListener("change", again);
-    const wait = () => {
-      matchMedia(
-        `(resolution: ${window.devicePixelRatio}dppx)`,
-      ).addEventListener(
-        "change",
-        () => {
-          again();
-          wait();
-        },
-        { once: true },
-      );
-    };
-    wait();
-    new ResizeObserver(again).observe(
-      /** @type {HTMLElement} */ (document.querySelector(".pictures")),
+    const slider = dom.byId("time", HTMLInputElement);
+    slider.addEventListener("input", () => {
+      pictures.follows = false;
+      pictures.move((Number(slider.value) / pictures.steps) * pictures.end);
+    });
+    const sizes = new ResizeObserver(() => pictures.draw());
+    sizes.observe(dom.byId("sketch", HTMLElement));
+    for (const name of pictures.names) {
+      const figure = pictures.figure(name);
+      sizes.observe(dom.find(figure, "canvas", HTMLCanvasElement));
+      dom
+        .find(figure, "details", HTMLDetailsElement)
+        .addEventListener("toggle", () => pictures.showTable(figure, name));
+    }
+    matchMedia("(prefers-color-scheme: dark)").addEventListener("change", () =>
+      pictures.draw(),
     );
-    window.addEventListener("beforeprint", () => {
-      pictures.printing = true;
-      again();
-    });
-    window.addEventListener("afterprint", () => {
-      pictures.printing = false;
-      again();
-    });
+    window.addEventListener("beforeprint", () => pictures.print(true));
+    window.addEventListener("afterprint", () => pictures.print(false));
+    pictures.watchRatio();
   },
 };

@@ -1,52 +1,134 @@
 "use strict";
 
-/** JSON Pointers (RFC 6901) into the scenario. */
+/** JSON Pointers (RFC 6901) on trees that are never changed, only replaced. */
 const pointer = {
-  /** @param {string} path */
-  parts(path) {
+  /**
+   * @param {string} path
+   * @returns {string[]}
+   */
+  keys(path) {
+    if (path === "") return [];
     return path
-      .split("/")
       .slice(1)
-      .map((part) => part.replaceAll("~1", "/").replaceAll("~0", "~"));
+      .split("/")
+      .map((key) => key.replaceAll("~1", "/").replaceAll("~0", "~"));
   },
 
   /**
-   * @param {Json} root
    * @param {string} path
-   * @returns {any}
+   * @param {...(string | number)} keys
+   * @returns {string}
    */
-  get(root, path) {
-    let at = /** @type {any} */ (root);
-    for (const part of pointer.parts(path)) {
-      if (at === null || typeof at !== "object") return undefined;
-      at = at[part];
+  join(path, ...keys) {
+    return keys.reduce(
+      (/** @type {string} */ sum, key) =>
+        `${sum}/${String(key).replaceAll("~", "~0").replaceAll("/", "~1")}`,
+      path,
+    );
+  },
+
+  /**
+   * The place that holds this one.
+   * @param {string} path
+   * @returns {string}
+   */
+  parent(path) {
+    return path.slice(0, Math.max(0, path.lastIndexOf("/")));
+  },
+
+  /**
+   * The last key.
+   * @param {string} path
+   * @returns {string}
+   */
+  last(path) {
+    return pointer.keys(path).at(-1) ?? "";
+  },
+
+  /**
+   * What stands at a place; undefined where nothing does.
+   * @param {Json} tree
+   * @param {string} path
+   * @returns {Json | undefined}
+   */
+  get(tree, path) {
+    /** @type {Json | undefined} */
+    let at = tree;
+    for (const key of pointer.keys(path)) {
+      if (Array.isArray(at)) at = at[Number(key)];
+      else if (pointer.isObject(at) && Object.hasOwn(at, key)) at = at[key];
+      else return undefined;
     }
     return at;
   },
 
   /**
-   * Sets a value, making the objects on the way; undefined removes it.
-   * @param {Json} root
+   * The tree with another value at a place; objects on the way are made.
+   * @param {Json} tree
    * @param {string} path
-   * @param {Json | undefined} value
+   * @param {Json} value
+   * @returns {Json}
    */
-  set(root, path, value) {
-    const parts = pointer.parts(path);
-    const last = /** @type {string} */ (parts.pop());
-    let at = /** @type {any} */ (root);
-    for (const part of parts) {
-      if (
-        at[part] === undefined ||
-        at[part] === null ||
-        typeof at[part] !== "object"
-      ) {
-        if (value === undefined) return;
-        at[part] = {};
-      }
-      at = at[part];
+  put(tree, path, value) {
+    return pointer.replace(tree, pointer.keys(path), value);
+  },
+
+  /**
+   * The tree without what stands at a place; of a list, the rest moves up.
+   * @param {Json} tree
+   * @param {string} path
+   * @returns {Json}
+   */
+  remove(tree, path) {
+    return pointer.replace(tree, pointer.keys(path), undefined);
+  },
+
+  /**
+   * @param {Json | undefined} tree
+   * @param {string[]} keys
+   * @param {Json | undefined} value
+   * @returns {Json}
+   */
+  replace(tree, keys, value) {
+    const [key, ...rest] = keys;
+    if (key === undefined) return value ?? null;
+    if (Array.isArray(tree)) {
+      const at = Number(key);
+      if (rest.length > 0)
+        return tree.map((old, i) =>
+          i === at ? pointer.replace(old, rest, value) : old,
+        );
+      if (value === undefined) return tree.filter((_, i) => i !== at);
+      return at < tree.length
+        ? tree.map((old, i) => (i === at ? value : old))
+        : [...tree, value];
     }
-    if (value !== undefined) at[last] = value;
-    else if (Array.isArray(at)) at.splice(Number(last), 1);
-    else delete at[last];
+    const old = pointer.isObject(tree) ? tree : {};
+    if (rest.length > 0) {
+      if (value === undefined && !Object.hasOwn(old, key)) return old;
+      return { ...old, [key]: pointer.replace(old[key], rest, value) };
+    }
+    if (value !== undefined) return { ...old, [key]: value };
+    return Object.fromEntries(
+      Object.entries(old).filter(([name]) => name !== key),
+    );
+  },
+
+  /**
+   * @param {Json | undefined} value
+   * @returns {value is JsonObject}
+   */
+  isObject(value) {
+    return typeof value === "object" && value !== null && !Array.isArray(value);
+  },
+
+  /**
+   * The same JSON?
+   * @param {Json | undefined} a
+   * @param {Json | undefined} b
+   * @returns {boolean}
+   */
+  same(a, b) {
+    return a === b || JSON.stringify(a) === JSON.stringify(b);
   },
 };
