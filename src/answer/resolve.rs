@@ -38,6 +38,8 @@ const FINEST: f64 = 1e-6;
 const GOOD_BAND: f64 = 8e-4;
 /// A moment earlier than this part of the last one is asked no sharper than one at that time.
 const EARLY: f64 = 2e-3;
+/// Two marches whose moments differ by less than this part of the time are extrapolated.
+const IN_STEP: f64 = 0.2;
 /// Refinements at most.
 const ROUNDS: usize = 6;
 
@@ -148,8 +150,11 @@ fn follow(coarse: &March, fine: &March, conditions: &[Condition], tolerance: f64
     let timed = |rough: Crossing, found: Option<&Crossing>| match found {
         Some(found) if found.reached == rough.reached => {
             let (by_mesh, by_time) = half_band(rough, *found, tolerance);
-            let time = (found.time + (found.time - rough.time) / 3.0).max(0.0);
-            let half = by_mesh + by_time;
+            let apart = found.time - rough.time;
+            // Far apart the two are not on their way to the truth in step; then the whole difference is doubt.
+            let in_step = apart.abs() < IN_STEP * found.time;
+            let time = if in_step { found.time + apart / 3.0 } else { found.time };
+            let half = if in_step { by_mesh + by_time } else { apart.abs() + by_time };
             Timed {
                 time,
                 low: (time - half).max(0.0),

@@ -205,8 +205,10 @@ pub fn checks(
     let mut all = Vec::new();
     if let Some(moment) = decisive {
         let half = words::duration(0.5 * (moment.high - moment.low));
-        let share = 50.0 * (moment.high - moment.low) / moment.time.max(f64::MIN_POSITIVE);
-        let text = format!("{} ± {half} ({} %)", when(moment.time, clock), short(share));
+        let mut text = format!("{} ± {half}", when(moment.time, clock));
+        if moment.time > 0.0 {
+            text += &format!(" ({} %)", short(50.0 * (moment.high - moment.low) / moment.time));
+        }
         all.push(("Error of the calculation itself", text));
     }
     let heat = |joule: f64| format!("{} MJ", short(joule * 1e-6));

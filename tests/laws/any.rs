@@ -118,6 +118,9 @@ impl Draw<'_> {
             "thickness_m": self.dice.scale(0.0005, 0.5),
             "density_kg_per_m3": self.dice.scale(30.0, 8000.0),
         });
+        if self.dice.chance(0.15) {
+            return self.library_layer(layer);
+        }
         let (heat_capacity, conductivity) = (self.dice.scale(400.0, 4200.0), self.dice.scale(0.02, 200.0));
         layer["heat_capacity_j_per_kg_k"] = self.property(heat_capacity);
         layer["conductivity_w_per_m_k"] = self.property(conductivity);
@@ -128,6 +131,15 @@ impl Draw<'_> {
         if i > 0 && self.dice.chance(0.3) {
             layer["contact_m2_k_per_w"] = json!(self.dice.scale(1e-4, 0.05));
         }
+        layer
+    }
+
+    /// Of a material of the library, but for the density.
+    fn library_layer(&mut self, mut layer: Value) -> Value {
+        let ids: Vec<&str> = stillheat::matter::library::ids().collect();
+        let drawn = self.dice.below(u32::try_from(ids.len()).unwrap_or(1));
+        layer["material"] = json!(ids[drawn as usize]);
+        self.constant = false;
         layer
     }
 

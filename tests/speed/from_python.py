@@ -95,8 +95,8 @@ METHODS = {
 def main():
     repetitions, names = int(sys.argv[1]), sys.argv[2:]
     for name in names:
-        for doublings in systems.DOUBLINGS:
-            march = March(systems.System(name, doublings))
+        for mesh in systems.MESHES[name]:
+            march = March(systems.System(name, mesh))
             for method, run in METHODS.items():
                 for tolerance in TOLERANCES:
                     times = []

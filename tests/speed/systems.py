@@ -1,7 +1,7 @@
 """The systems that every peer is given: nested meshes of the workloads, in watts and kelvin.
 
 A peer gets for nothing what our own program works out by itself: a good mesh. The scenarios and the answers are
-those of tests/reference/; the cells of each layer are set here and doubled from mesh to mesh.
+those of tests/reference/; the meshes are set here.
 """
 import json
 import math
@@ -11,10 +11,12 @@ SIGMA = 5.670374419e-8
 KELVIN = 273.15
 REFERENCE = pathlib.Path(__file__).resolve().parents[1] / "reference"
 
-# Cells of each layer on the coarsest mesh, and how nodes are drawn towards the sides of the layer.
-CELLS = {"W1": [6], "W2": [5, 1, 2]}
-DRAWN = {"W1": ["out"], "W2": ["out", "even", "both"]}
-DOUBLINGS = range(4)
+# Meshes, each as (cells across the slowest layer, how often all cells are halved after that), coarsest first.
+MESHES = {"W1": [(6, 0), (6, 1), (6, 2), (6, 3)], "W2": [(5, 0), (6, 0), (5, 1), (5, 2), (5, 3)]}
+# Cells of each layer before halving, as our own program chooses them.
+CELLS = {("W1", 6): [6], ("W2", 5): [5, 1, 2], ("W2", 6): [6, 1, 2]}
+# Which sides of each layer its nodes are drawn towards.
+DRAWN = {"W1": ["out"], "W2": ["out", "both", "both"]}
 
 
 def case(name):
@@ -25,17 +27,18 @@ def truth(name):
     return case(name)["expected"][0]["value"]
 
 
-def cells(name, doublings):
-    return [count * 2**doublings for count in CELLS[name]]
+def cells(name, mesh):
+    slowest, halvings = mesh
+    return [count * 2**halvings for count in CELLS[name, slowest]]
 
 
-def _places(layers, name, doublings):
+def _places(layers, name, mesh):
     places, layer_of_cell = [0.0], []
-    for number, (layer, count) in enumerate(zip(layers, cells(name, doublings))):
+    for number, (layer, count) in enumerate(zip(layers, cells(name, mesh))):
         start = places[-1]
         for i in range(1, count + 1):
             s = i / count
-            drawn = {"even": s, "out": math.sin(math.pi / 2 * s), "both": 0.5 * (1 - math.cos(math.pi * s))}
+            drawn = {"out": math.sin(math.pi / 2 * s), "both": 0.5 * (1 - math.cos(math.pi * s))}
             places.append(start + layer["thickness_m"] * drawn[DRAWN[name][number]])
             layer_of_cell.append(number)
     return places, layer_of_cell
@@ -44,11 +47,11 @@ def _places(layers, name, doublings):
 class System:
     """Nodes in a row: insulated inside, film and radiation outside."""
 
-    def __init__(self, name, doublings):
+    def __init__(self, name, mesh):
         scenario = case(name)["scenario"]
         item, outer = scenario["item"], scenario["surroundings"]["outer"][0]
         layers = item["layers"]
-        places, layer_of_cell = _places(layers, name, doublings)
+        places, layer_of_cell = _places(layers, name, mesh)
         around = item["shape"] == "cylinder"
         self.name, self.nodes = name, len(places)
         self.capacity, self.link = [0.0] * self.nodes, []

@@ -1,13 +1,11 @@
 //! Our own rows of the speed comparison: the march on a given mesh, and the whole answer.
 //!
-//! Arguments: repetitions, then for each workload its name, its file in `tests/reference/` and the cells of each
-//! layer of its meshes, coarsest first: `W2 W2.json 5,1,2 10,2,4 20,4,8`. Standard output, one line per mesh and
-//! tolerance: `name nodes method tolerance time steps milliseconds`.
+//! Arguments: repetitions, then for each workload its name, its file in `tests/reference/` and its meshes, each as
+//! cells across the slowest layer and how often all cells are halved: `W2 W2.json 5:0,6:0,5:1`. Standard output,
+//! one line per mesh and tolerance: `name nodes method tolerance time steps milliseconds`.
 
 use std::hint::black_box;
-use stillheat::answer::{Ending, Orders, march};
-use stillheat::item::{Face, Item, Motion, Side};
-use stillheat::mesh::{Line, LineLayer, Mesh, line};
+use stillheat::answer::{Ending, Orders, march, mesh};
 
 /// Tolerances tried, K.
 const TOLERANCES: [f64; 7] = [1.0, 0.3, 0.1, 0.03, 1e-2, 1e-3, 1e-4];
@@ -40,42 +38,29 @@ fn milliseconds(repetitions: usize, mut run: impl FnMut()) -> f64 {
     times[times.len() / 2] * 1e3
 }
 
-/// A mesh of our own kind with the cells of each layer given.
-fn mesh(item: &Item, cells: &[usize]) -> Mesh {
-    let layers = item.layers().iter().zip(cells).map(|(layer, &cells)| LineLayer {
-        thickness: layer.thickness,
-        mixed: layer.motion != Motion::Still,
-        joint_resists: layer.contact > 0.0,
-        cells,
-    });
-    let open = |side: Side| item.face(side).rows.iter().any(|row| row.1 != Face::Insulated);
-    line(&Line {
-        shape: item.shape(),
-        layers: layers.collect(),
-        active: [open(Side::Inner), open(Side::Outer)],
-    })
-}
-
 fn main() {
     let arguments: Vec<String> = std::env::args().skip(1).collect();
-    let repetitions = arguments[0].parse().expect("repetitions");
-    let mut rest = arguments[1..].iter().peekable();
-    while let (Some(name), Some(file)) = (rest.next(), rest.next()) {
-        let case = std::fs::read_to_string(file).expect("the file of the workload");
+    let repetitions = number(&arguments[0]);
+    for workload in arguments[1..].chunks(3) {
+        let case = std::fs::read_to_string(&workload[1]).expect("the file of the workload");
         let case: serde_json::Value = serde_json::from_str(&case).expect("JSON");
         let text = case["scenario"].to_string();
-        while let Some(cells) = rest.next_if(|word| word.contains(',') || word.parse::<usize>().is_ok()) {
-            let cells: Vec<usize> = cells.split(',').map(|word| word.parse().expect("cells")).collect();
-            marches(name, &text, &cells, repetitions);
+        for written in workload[2].split(',') {
+            let (cells, halvings) = written.split_once(':').expect("cells:halvings");
+            marches(&workload[0], &text, number(cells), number(halvings), repetitions);
         }
-        whole_answer(name, &text, repetitions);
+        whole_answer(&workload[0], &text, repetitions);
     }
 }
 
-fn marches(name: &str, text: &str, cells: &[usize], repetitions: usize) {
+fn number<T: std::str::FromStr>(word: &str) -> T {
+    word.parse().ok().expect("a number")
+}
+
+fn marches(name: &str, text: &str, cells: usize, halvings: u32, repetitions: usize) {
     let solved = stillheat::solve(text).expect("a valid scenario");
     let item = &solved.checked.item;
-    let mesh = mesh(item, cells);
+    let mesh = mesh(item, cells, halvings);
     for tolerance in TOLERANCES {
         let orders =
             Orders { tolerance, until: item.look_ahead(), stop_when_settled: false, stop_when_reached: true };
