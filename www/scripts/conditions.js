@@ -32,9 +32,10 @@ const conditions = {
     conditions.bindWhat(made, base, what);
     conditions.bindOf(made, base, what);
     conditions.bindLimit(made, base, what);
-    const remove = dom.find(made, "[data-remove]", HTMLButtonElement);
-    remove.setAttribute("aria-label", `Remove: ${name}`);
-    remove.addEventListener("click", () => conditions.remove(list, i));
+    const remove = () => conditions.remove(list, i);
+    dom
+      .find(made, ".condition", HTMLElement)
+      .append(dom.cross(`Remove: ${name}`, remove));
     fields.bind(made, base);
     return made;
   },

@@ -85,6 +85,20 @@ const dom = {
   },
 
   /**
+   * A cross that takes something away; its words are there for those who cannot see what it stands beside.
+   * @param {string} text
+   * @param {() => void} act
+   * @returns {HTMLButtonElement}
+   */
+  cross(text, act) {
+    const made = dom.button("", act, "quiet out");
+    const sign = dom.make("span", "×");
+    sign.setAttribute("aria-hidden", "true");
+    made.append(sign, dom.make("span", text, "unseen"));
+    return made;
+  },
+
+  /**
    * The text as an element shows it, without the white space of the source.
    * @param {Element | null} element
    * @returns {string}

@@ -96,9 +96,7 @@ const fields = {
         () => scenario.set(path, undefined),
         `${fields.id(path)}-ask`,
       );
-    const button = dom.button("×", out, "quiet out");
-    button.setAttribute("aria-label", `Leave out: ${label}`);
-    return button;
+    return dom.cross(`Leave out: ${label}`, out);
   },
 
   /**

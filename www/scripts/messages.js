@@ -69,8 +69,10 @@ const messages = {
    */
   want(field, wanted) {
     const { control, message } = field;
+    const said = "still needed";
     if (!(control instanceof HTMLSelectElement)) {
-      control.placeholder = wanted ? "still needed" : "";
+      if (wanted) control.placeholder = said;
+      else if (control.placeholder === said) control.placeholder = "";
     }
     if (!wanted) return;
     message.classList.add("needed");

@@ -177,9 +177,10 @@ const pictures = {
         Object.assign(dom.make("th", words), { scope: "col" }),
       ),
     );
-    const body = rows.map((cells) => {
+    const body = rows.map(([first = "", ...cells]) => {
       const row = dom.make("tr");
-      row.append(...cells.map((words) => dom.make("td", words)));
+      const name = Object.assign(dom.make("th", first), { scope: "row" });
+      row.append(name, ...cells.map((cell) => dom.make("td", cell)));
       return row;
     });
     const table = dom.find(figure, "table", HTMLTableElement);
