@@ -141,6 +141,8 @@ declare class Page {
     theme: Theme,
     system: System,
   ): void;
+  height(name: PictureName, width: number, system: System): number;
+  description(name: PictureName, time: number, system: System): string;
   table(
     picture: PictureName,
     time_s: number,

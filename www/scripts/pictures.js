@@ -126,7 +126,10 @@ const pictures = {
   drawOn(canvas, name) {
     const [paperWidth, paperHeight] = pictures.paper[name];
     const width = pictures.printing ? paperWidth : canvas.clientWidth;
-    const height = pictures.printing ? paperHeight : canvas.clientHeight;
+    const height = pictures.printing
+      ? paperHeight
+      : core.ask((page) => page.height(name, width, store.system), 0);
+    if (!pictures.printing) canvas.style.height = `${height}px`;
     const ratio = pictures.printing
       ? pictures.paperRatio
       : window.devicePixelRatio;
@@ -164,13 +167,17 @@ const pictures = {
   showTable(figure, name) {
     /** @type {NumberTable} */
     const empty = { caption: "", columns: [], rows: [] };
+    const seen = core.ask(
+      (page) => page.description(name, pictures.time, store.system),
+      "",
+    );
+    dom
+      .find(figure, "canvas", HTMLCanvasElement)
+      .setAttribute("aria-label", seen);
+    if (!dom.find(figure, "details", HTMLDetailsElement).open) return;
     const { caption, columns, rows } =
       core.ask((page) => page.table(name, pictures.time, store.system), null) ??
       empty;
-    dom
-      .find(figure, "canvas", HTMLCanvasElement)
-      .setAttribute("aria-label", caption);
-    if (!dom.find(figure, "details", HTMLDetailsElement).open) return;
     const head = dom.make("tr");
     head.append(
       ...columns.map((words) =>
