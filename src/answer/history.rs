@@ -72,6 +72,20 @@ impl History {
         out
     }
 
+    /// Watched temperatures at some times, K: one row per watch, one entry per time.
+    pub fn courses(&self, watches: &[Watch], times: &[f64]) -> Vec<Vec<f64>> {
+        let gauges: Vec<Gauge> = watches.iter().map(|watch| Gauge::new(*watch, &self.mesh)).collect();
+        let mut rows = vec![Vec::with_capacity(times.len()); watches.len()];
+        for &time in times {
+            let temperatures = self.temperatures(time);
+            let rates = if gauges.iter().any(Gauge::needs_rates) { self.rates(time) } else { Vec::new() };
+            for (row, gauge) in rows.iter_mut().zip(&gauges) {
+                row.push(gauge.value(&self.mesh.places, &temperatures, &rates));
+            }
+        }
+        rows
+    }
+
     /// A watched quantity at a time, K (a rate: K/s).
     pub fn watch(&self, watch: &Watch, time: f64) -> f64 {
         let gauge = Gauge::new(*watch, &self.mesh);

@@ -166,7 +166,9 @@ mod tests {
     #[test]
     fn a_number_steps_and_a_table_does_not() {
         let up = |text, kind| step(text, kind, System::Metric, true, false);
-        assert!(up("400 mm", "length").is_some_and(|text| text.ends_with(" mm") && text > "400 mm".to_owned()));
+        assert!(
+            up("400 mm", "length").is_some_and(|text| text.ends_with(" mm") && text > "400 mm".to_owned())
+        );
         assert_eq!(up("0 h: 18 °C; 6 h: 12 °C", "temperature-table"), None);
     }
 

@@ -13,6 +13,8 @@ use crate::units::words;
 
 /// Times at which curves are read.
 const POINTS: usize = 160;
+/// Rows of their table, less one.
+const ROWS: usize = 16;
 
 /// An answer, ready to be shown in some units.
 pub struct Shown<'a> {
@@ -93,18 +95,24 @@ impl<'a> Shown<'a> {
 
     /// What is watched, over time.
     pub fn curve(&self, cursor: Option<f64>) -> Curve {
+        self.curve_of(POINTS, cursor)
+    }
+
+    fn curve_of(&self, points: usize, cursor: Option<f64>) -> Curve {
         let end = self.end();
         // Denser at first, where most happens.
-        let times: Vec<f64> = (0..=POINTS)
+        let times: Vec<f64> = (0..=points)
             .map(|i| {
-                let part = i as f64 / POINTS as f64;
+                let part = i as f64 / points as f64;
                 end * part * (0.15 + 0.85 * part)
             })
             .collect();
-        let history = &self.solved.resolved.fine.history;
-        let lines = self.watched().into_iter().map(|(name, watch)| CurveLine {
+        let watched = self.watched();
+        let watches: Vec<Watch> = watched.iter().map(|line| line.1).collect();
+        let courses = self.solved.resolved.fine.history.courses(&watches, &times);
+        let lines = watched.into_iter().zip(courses).map(|((name, _), course)| CurveLine {
             name,
-            values: times.iter().map(|time| self.system.temperature(history.watch(&watch, *time))).collect(),
+            values: course.into_iter().map(|kelvin| self.system.temperature(kelvin)).collect(),
         });
         Curve {
             lines: lines.collect(),
@@ -221,11 +229,10 @@ impl<'a> Shown<'a> {
 
     /// The numbers of the curve.
     pub fn curve_table(&self) -> Table {
-        let curve = self.curve(None);
+        let curve = self.curve_of(ROWS, None);
         let mut columns = vec!["time".to_owned()];
         columns.extend(curve.lines.iter().map(|line| format!("{} {}", line.name, curve.unit)));
-        let every = POINTS / 16;
-        let rows = (0..curve.times.len()).step_by(every).map(|i| {
+        let rows = (0..curve.times.len()).map(|i| {
             let mut row = vec![self.moment_words(curve.times[i])];
             row.extend(curve.lines.iter().map(|line| super::section::tenth(line.values[i])));
             row

@@ -99,7 +99,10 @@ impl Body {
 
 fn shade(on: &mut dyn Painter, body: &Body, what: &Section<'_>, layer: &SectionLayer) {
     let (from, to) = layer.edges;
-    let strips = if layer.nodes.0 == layer.nodes.1 { 1 } else { STRIPS };
+    // Finer than two pixels nobody sees.
+    #[allow(clippy::cast_possible_truncation, clippy::cast_sign_loss)]
+    let seen = (0.5 * body.length(to - from)).ceil() as usize;
+    let strips = if layer.nodes.0 == layer.nodes.1 { 1 } else { seen.clamp(1, STRIPS) };
     for i in (0..strips).rev() {
         let part = |i: usize| from + (to - from) * i as f64 / strips as f64;
         let colour = colour(what, temperature_in(what, layer, 0.5 * (part(i) + part(i + 1))));

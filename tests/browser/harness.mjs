@@ -36,7 +36,7 @@ export function launch() {
  * A fresh visit: nothing remembered, every console message and every request but that of the file itself collected.
  */
 export async function visit(browser, options = {}) {
-  const { width = 1440, height = 900, scheme = "light", scenario } = options;
+  const { width = 1440, height = 900, scheme = "light" } = options;
   const context = await browser.newContext({
     viewport: { width, height },
     colorScheme: scheme,
@@ -51,16 +51,12 @@ export async function visit(browser, options = {}) {
     const address = request.url();
     if (address !== page && !address.startsWith("data:") && !address.startsWith("blob:")) heard.push(`request: ${address}`);
   });
-  if (scenario) {
-    const kept = JSON.stringify({ scenario, drafts: {}, us: false });
-    await context.addInitScript((text) => localStorage.getItem("stillheat") ?? localStorage.setItem("stillheat", text), kept);
-  }
   await tab.goto(page);
   await answered(tab);
   return { context, tab, heard };
 }
 
-/** Waits until the answer to what was last done is shown. */
+/** Waits until the first answer is shown, and that to what was done last. */
 export async function answered(tab) {
   await tab.waitForFunction(() => performance.getEntriesByName("stillheat-answer").length > 0);
   await tab.evaluate(() => new Promise((done) => window.requestAnimationFrame(() => window.requestAnimationFrame(done))));

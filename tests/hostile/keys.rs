@@ -88,7 +88,12 @@ fn inside_numbers() -> Vec<Row> {
     let property = "/item/layers/0/conductivity_w_per_m_k";
     let cases = [
         (face, json!({ "value": 20, "low": 10, "hihg": 30 }), vec!["high", "hihg"], "Did you mean \"high\"?"),
-        (face, json!({ "form_c": 20, "to_c": 30, "over_s": 60 }), vec!["from_c", "form_c"], "mean \"from_c\"?"),
+        (
+            face,
+            json!({ "form_c": 20, "to_c": 30, "over_s": 60 }),
+            vec!["from_c", "form_c"],
+            "mean \"from_c\"?",
+        ),
         (
             face,
             json!({ "at_s": [0, 9], "values_c": [1, 2], "repeats_s": 10 }),
@@ -110,7 +115,12 @@ fn inside_numbers() -> Vec<Row> {
             vec!["polynomial", "polynomial_in_c"],
             "mean \"polynomial_in_c\"?",
         ),
-        (property, json!({ "value": 1, "low": 1, "high": 1, "unit": 1 }), vec!["unit"], "Known here: value, low"),
+        (
+            property,
+            json!({ "value": 1, "low": 1, "high": 1, "unit": 1 }),
+            vec!["unit"],
+            "Known here: value, low",
+        ),
     ];
     let row = |(object, value, keys, says): (&str, Value, Vec<&str>, &str)| {
         let places: Vec<String> = keys.iter().map(|key| format!("{object}/{key}")).collect();
