@@ -174,6 +174,14 @@ interface Door {
 
 declare const wasm_bindgen: Door;
 
+/** What is kept from one opening of the page to the next. */
+interface Kept {
+  /** The scenario as it was left. */
+  text: string;
+  /** The last scenario that had an answer; empty where there was none. */
+  answered: string;
+}
+
 /** A control of the form and the place in the scenario that it shows. */
 interface Field {
   path: string;

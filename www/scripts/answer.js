@@ -8,6 +8,19 @@ const answer = {
    */
   report: null,
 
+  /** The scenario that it answers. */
+  text: "",
+
+  /**
+   * Asks the core, and shows what it says.
+   * @param {string} text
+   */
+  ask(text) {
+    const solution = core.solve(text);
+    if (solution?.report) answer.text = text;
+    answer.show(solution);
+  },
+
   /** @param {Solution | null} solution null when the core failed */
   show(solution) {
     if (solution === null) {
@@ -30,6 +43,7 @@ const answer = {
   /** A scenario that has nothing to do with the last answer came onto the page. */
   forget() {
     answer.report = null;
+    answer.text = "";
     core.ask((page) => page.forget(), undefined);
   },
 
@@ -133,7 +147,8 @@ const answer = {
       link.addEventListener("click", (event) =>
         answer.follow(event, problem.path),
       );
-      row.append(link, said === "" ? "" : ". ");
+      const stop = place.endsWith("?") ? " " : ". ";
+      row.append(link, said === "" ? "" : stop);
     }
     row.append(said);
     if (problem.kind === "unknown")

@@ -5,11 +5,53 @@ const form = {
   /** Boxes whose contents are made from the scenario. */
   made: ["layers", "start", "faces", "ready_when", "must_not", "probes"],
 
+  /** How long after a letter a choice may still be under way, ms. */
+  pause: 900,
+
+  /** When a letter was last typed in a choice, ms. */
+  lettered: -Infinity,
+
+  /** @type {ReturnType<typeof setTimeout> | undefined} */
+  waiting: undefined,
+
   /**
    * Makes the form anew; what was open stays open, and the focus stays where it was or goes where it is told.
+   * While somebody is spelling out a choice, its list stays and all waits for them.
    * @param {string} [focus] id of a control
    */
   render(focus) {
+    clearTimeout(form.waiting);
+    form.waiting = undefined;
+    const rest = form.lettered + form.pause - performance.now();
+    const spelling = document.activeElement instanceof HTMLSelectElement;
+    if (rest > 0 && spelling) {
+      form.waiting = setTimeout(() => form.flush(), rest);
+    } else {
+      form.make(focus);
+    }
+  },
+
+  /** Makes the form anew at once, if it is waiting to be. */
+  flush() {
+    if (form.waiting === undefined) return;
+    form.lettered = -Infinity;
+    form.render();
+  },
+
+  /** @param {KeyboardEvent} event */
+  key(event) {
+    const letter = event.key.length === 1 && !event.ctrlKey && !event.metaKey;
+    if (letter && event.target instanceof HTMLSelectElement) {
+      form.lettered = performance.now();
+    } else {
+      form.flush();
+    }
+  },
+
+  /**
+   * @param {string} [focus] id of a control
+   */
+  make(focus) {
     const wanted = focus ?? document.activeElement?.id ?? "";
     const open = form.openDetails();
     fields.forget();
@@ -21,14 +63,27 @@ const form = {
     conditions.render();
     probes.render();
     for (const details of dom.all(form.element(), "details")) {
-      if (details instanceof HTMLDetailsElement)
+      if (details instanceof HTMLDetailsElement) {
         details.open = open.has(details.id);
+      }
     }
-    const target = wanted === "" ? null : document.getElementById(wanted);
+    form.focus(wanted, focus !== undefined);
+  },
+
+  /**
+   * @param {string} id
+   * @param {boolean} intoView
+   */
+  focus(id, intoView) {
+    const target = id === "" ? null : document.getElementById(id);
     const more = target?.closest("details");
     if (more) more.open = true;
-    if (target !== null && target !== document.activeElement)
-      target.focus({ preventScroll: focus === undefined });
+    if (target === null || target === document.activeElement) return;
+    target.focus({ preventScroll: !intoView });
+  },
+
+  listen() {
+    document.addEventListener("keydown", form.key, { capture: true });
   },
 
   /** @returns {HTMLElement} */

@@ -71,6 +71,7 @@ const layers = {
   bindName(block, i) {
     const legend = dom.find(block, "legend", HTMLElement);
     const summary = dom.find(block, "summary", HTMLElement);
+    const names = dom.all(block, "button .name");
     const path = pointer.join(layers.path, i, "name");
     const show = () => {
       const own = String(scenario.get(path) ?? "");
@@ -78,6 +79,8 @@ const layers = {
       const after = dom.make("span", own === "" ? "" : `, ${own}`, "unseen");
       legend.replaceChildren(before, String(i + 1), after);
       summary.textContent = own === "" ? "More" : own;
+      for (const name of names)
+        name.textContent = ` ${layers.names()[i] ?? ""}`;
     };
     let name = layers.names()[i];
     show();

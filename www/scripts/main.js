@@ -5,17 +5,21 @@ const main = {
   async start() {
     await core.start();
     const kept = store.load();
-    const text = kept?.text ?? files.examples()[0]?.text ?? "";
+    const text = kept.text || (files.examples()[0]?.text ?? "");
     scenario.tree = files.parse(text) ?? files.empty;
     scenario.opened = text === "" ? null : text;
     form.render();
     main.listen();
+    if (kept.answered !== "" && kept.answered !== text) {
+      answer.ask(kept.answered);
+    }
     schedule.answer();
     performance.mark("stillheat-answer");
   },
 
   listen() {
     for (const part of [
+      form,
       undo,
       layers,
       start,

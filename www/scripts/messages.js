@@ -128,15 +128,15 @@ const messages = {
     const roots = [...document.querySelectorAll("template")].map(
       (template) => template.content,
     );
-    for (const root of [document, ...roots]) {
+    for (const root of roots) {
       for (const box of dom.all(root, "[data-at], [data-over]")) {
-        const key = (box.dataset["at"] ?? box.dataset["over"])
-          ?.split("/")
-          .pop();
-        const label =
-          box.dataset["name"] ?? dom.words(box.querySelector("label"));
-        if (key && label) labels.set(key, label);
+        const { at, over = at, name } = box.dataset;
+        labels.set(over, name ?? dom.words(box.querySelector("label")));
       }
+    }
+    for (const [box, first] of form.fixed ?? []) {
+      const key = box.dataset["at"]?.split("/").pop();
+      labels.set(key, dom.words(first.querySelector("label")));
     }
     for (const option of document.querySelectorAll("#start-kind option")) {
       labels.set(option.getAttribute("value"), dom.words(option));

@@ -20,7 +20,7 @@ const schedule = {
 
   answer() {
     schedule.frame = 0;
-    answer.show(core.solve(scenario.text()));
+    answer.ask(scenario.text());
   },
 
   /** The page may be closed before the rest is over. */

@@ -7,24 +7,29 @@ const store = {
   /** @type {System} */
   system: "metric",
 
-  /** @returns {{ text: string } | null} the scenario kept last, if one was */
+  /** @returns {Kept} the scenario kept last, and the last that had an answer */
   load() {
+    const text = (/** @type {unknown} */ kept) =>
+      typeof kept === "string" ? kept : "";
     try {
-      const kept = JSON.parse(localStorage.getItem(store.key) ?? "null");
-      if (kept?.system === "us") store.system = "us";
-      return typeof kept?.text === "string" ? { text: kept.text } : null;
+      const kept = JSON.parse(localStorage.getItem(store.key) ?? "{}");
+      if (kept.system === "us") store.system = "us";
+      return { text: text(kept.text), answered: text(kept.answered) };
     } catch {
-      return null;
+      return { text: "", answered: "" };
     }
   },
 
   /** Keeps the scenario with everything that is typed, readable or not. */
   keep() {
+    /** @type {Kept & { system: System }} */
+    const kept = {
+      text: scenario.text(),
+      answered: answer.text,
+      system: store.system,
+    };
     try {
-      localStorage.setItem(
-        store.key,
-        JSON.stringify({ text: scenario.text(), system: store.system }),
-      );
+      localStorage.setItem(store.key, JSON.stringify(kept));
     } catch {
       // Not allowed here, or full: the page works without it.
     }
