@@ -36,6 +36,8 @@ const browser = [
   "atob",
   "URL",
   "Blob",
+  "DecompressionStream",
+  "Response",
   "Option",
   "CSS",
   "ResizeObserver",

@@ -46,7 +46,7 @@ test("from an empty scenario to a saved file and back by keyboard alone", async 
   await choose(tab, "Concrete");
   await tabTo(tab, "Thickness");
   await write(tab, "0,15 m");
-  await tabTo(tab, "Throughout");
+  await tabTo(tab, "Temperature");
   await write(tab, "180 °C");
   await tabTo(tab, "Its temperature");
   await write(tab, "20");
