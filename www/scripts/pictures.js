@@ -14,6 +14,12 @@ const pictures = {
   /** Width and height on paper, in pixels of the page. @type {Record<PictureName, [number, number]>} */
   paper: { section: [270, 190], curve: [390, 230], profile: [675, 200] },
 
+  /**
+   * The canvases there are, what they show and how large they are.
+   * @type {Map<HTMLCanvasElement, Picture>}
+   */
+  shown: new Map(),
+
   /** The time that is shown, s after the stop. */
   time: 0,
 
@@ -101,14 +107,10 @@ const pictures = {
   /** All pictures anew. */
   draw() {
     if (answer.report === null) return;
-    for (const name of pictures.names) {
-      const figure = pictures.figure(name);
-      pictures.drawOn(dom.find(figure, "canvas", HTMLCanvasElement), name);
-      pictures.showTable(figure, name);
+    for (const [canvas, picture] of pictures.shown) {
+      pictures.drawOn(canvas, picture);
     }
-    const sketch = dom.byId("sketch", HTMLCanvasElement);
-    if (sketch.clientWidth > 0 && !pictures.printing)
-      pictures.drawOn(sketch, "section");
+    for (const name of pictures.names) pictures.showTable(name);
   },
 
   /**
@@ -121,31 +123,35 @@ const pictures = {
 
   /**
    * @param {HTMLCanvasElement} canvas
-   * @param {PictureName} name
+   * @param {Picture} picture
    */
-  drawOn(canvas, name) {
-    const [paperWidth, paperHeight] = pictures.paper[name];
-    const width = pictures.printing ? paperWidth : canvas.clientWidth;
-    const height = pictures.printing ? paperHeight : canvas.clientHeight;
+  drawOn(canvas, { name, size }) {
+    const [width, height] = pictures.printing ? pictures.paper[name] : size;
     const ratio = pictures.printing
       ? pictures.paperRatio
       : window.devicePixelRatio;
     const context = canvas.getContext("2d");
     if (width === 0 || height === 0 || context === null) return;
-    canvas.width = Math.round(width * ratio);
-    canvas.height = Math.round(height * ratio);
-    const draw = (/** @type {Page} */ page) =>
-      page.draw(
-        name,
-        context,
-        width,
-        height,
-        ratio,
-        pictures.time,
-        pictures.theme(),
-        store.system,
-      );
-    core.ask(draw, undefined);
+    const [across, down] = [width, height].map((side) =>
+      Math.round(side * ratio),
+    );
+    // A canvas that is given a size loses what it had in store, even if it is the same.
+    if (canvas.width !== across) canvas.width = across ?? 0;
+    if (canvas.height !== down) canvas.height = down ?? 0;
+    core.ask(
+      (page) =>
+        page.draw(
+          name,
+          context,
+          width,
+          height,
+          ratio,
+          pictures.time,
+          pictures.theme(),
+          store.system,
+        ),
+      undefined,
+    );
   },
 
   /** @returns {Theme} */
@@ -158,10 +164,10 @@ const pictures = {
 
   /**
    * The same numbers for those who cannot see the picture; only made when they are looked at.
-   * @param {HTMLElement} figure
    * @param {PictureName} name
    */
-  showTable(figure, name) {
+  showTable(name) {
+    const figure = pictures.figure(name);
     /** @type {NumberTable} */
     const empty = { caption: "", columns: [], rows: [] };
     const { caption, columns, rows } =
@@ -217,21 +223,42 @@ const pictures = {
     pictures.draw();
   },
 
+  /**
+   * A canvas has another size: drawn anew for it, before it is shown.
+   * @param {ResizeObserverEntry[]} entries
+   */
+  resize(entries) {
+    for (const { target, contentRect } of entries) {
+      if (!(target instanceof HTMLCanvasElement)) continue;
+      const picture = pictures.shown.get(target);
+      if (picture === undefined) continue;
+      picture.size = [contentRect.width, contentRect.height];
+      if (answer.report !== null) pictures.drawOn(target, picture);
+    }
+  },
+
   listen() {
     const slider = dom.byId("time", HTMLInputElement);
     slider.addEventListener("input", () => {
       pictures.follows = false;
       pictures.move((Number(slider.value) / pictures.steps) * pictures.end);
     });
-    const sizes = new ResizeObserver(() => pictures.draw());
-    sizes.observe(dom.byId("sketch", HTMLElement));
+    const sizes = new ResizeObserver(pictures.resize);
+    const show = (
+      /** @type {HTMLCanvasElement} */ canvas,
+      /** @type {PictureName} */ name,
+    ) => {
+      pictures.shown.set(canvas, { name, size: [0, 0] });
+      sizes.observe(canvas);
+    };
     for (const name of pictures.names) {
       const figure = pictures.figure(name);
-      sizes.observe(dom.find(figure, "canvas", HTMLCanvasElement));
+      show(dom.find(figure, "canvas", HTMLCanvasElement), name);
       dom
         .find(figure, "details", HTMLDetailsElement)
-        .addEventListener("toggle", () => pictures.showTable(figure, name));
+        .addEventListener("toggle", () => pictures.showTable(name));
     }
+    show(dom.byId("sketch", HTMLCanvasElement), "section");
     matchMedia("(prefers-color-scheme: dark)").addEventListener("change", () =>
       pictures.draw(),
     );
