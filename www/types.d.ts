@@ -141,6 +141,8 @@ declare class Page {
     theme: Theme,
     system: System,
   ): void;
+  height(name: PictureName, width: number, system: System): number;
+  description(name: PictureName, time: number, system: System): string;
   table(
     picture: PictureName,
     time_s: number,
@@ -172,10 +174,10 @@ interface Door {
 
 declare const wasm_bindgen: Door;
 
-/** What a canvas shows, and its width and height in CSS px. */
+/** What a canvas shows, and its width in CSS px. */
 interface Picture {
   name: PictureName;
-  size: [number, number];
+  width: number;
 }
 
 /** What is kept from one opening of the page to the next. */

@@ -1,9 +1,9 @@
 //! A painter that draws on a canvas, sharp at any device pixel ratio.
 
-use crate::picture::{Anchor, Colour, Painter, Stroke, Type};
+use crate::picture::{Anchor, Colour, Fill, Painter, Path, Point, RIM, Step, Stroke, TextStyle, Weight};
 use js_sys::Array;
 use wasm_bindgen::JsValue;
-use web_sys::CanvasRenderingContext2d;
+use web_sys::{CanvasGradient, CanvasRenderingContext2d};
 
 const FAMILY: &str =
     "ui-sans-serif, system-ui, \"Segoe UI\", Roboto, \"Noto Sans\", \"DejaVu Sans\", sans-serif";
@@ -11,6 +11,7 @@ const FAMILY: &str =
 /// A canvas of a size in CSS px.
 pub struct Canvas {
     context: CanvasRenderingContext2d,
+    ratio: f64,
 }
 
 impl Canvas {
@@ -18,63 +19,101 @@ impl Canvas {
     pub fn new(context: CanvasRenderingContext2d, ratio: f64, size: (f64, f64), paper: Colour) -> Self {
         // A context that refuses draws nothing; there is nothing to be done about it here.
         let _ = context.set_transform(ratio, 0.0, 0.0, ratio, 0.0, 0.0);
-        context.set_fill_style_str(&css(paper));
+        context.set_global_alpha(1.0);
+        context.set_fill_style_str(&paper.css());
         context.fill_rect(0.0, 0.0, size.0, size.1);
         context.set_line_join("round");
-        Self { context }
+        Self { context, ratio }
     }
 
-    fn path(&self, points: &[(f64, f64)]) {
-        self.context.begin_path();
-        for (i, (x, y)) in points.iter().enumerate() {
-            if i == 0 {
-                self.context.move_to(*x, *y);
-            } else {
-                self.context.line_to(*x, *y);
+    fn trace(&self, path: &Path) {
+        let context = &self.context;
+        context.begin_path();
+        for step in &path.steps {
+            match *step {
+                Step::Move((x, y)) => context.move_to(x, y),
+                Step::Line((x, y)) => context.line_to(x, y),
+                Step::Arc { centre: (x, y), radius, from, to } => {
+                    let _ = context.arc_with_anticlockwise(x, y, radius, from, to, to < from);
+                }
+                Step::Close => context.close_path(),
             }
         }
     }
 
-    fn set(&self, set: Type) {
-        let weight = if set.bold { "600 " } else { "" };
-        self.context.set_font(&format!("{weight}{}px {FAMILY}", set.size));
+    fn set_font(&self, size: f64, weight: Weight) {
+        let weight = match weight {
+            Weight::Regular => "",
+            Weight::Bold => "600 ",
+        };
+        self.context.set_font(&format!("{weight}{size}px {FAMILY}"));
+    }
+
+    fn fill_with(&self, gradient: &CanvasGradient, stops: &[(f64, Colour)]) {
+        for (place, colour) in stops {
+            let _ = gradient.add_color_stop(place.clamp(0.0, 1.0) as f32, &colour.css());
+        }
+        self.context.set_fill_style_canvas_gradient(gradient);
+        self.context.fill();
     }
 }
 
 impl Painter for Canvas {
-    fn fill(&mut self, points: &[(f64, f64)], colour: Colour) {
-        self.context.set_fill_style_str(&css(colour));
-        self.path(points);
-        self.context.close_path();
-        self.context.fill();
+    fn fill(&mut self, path: &Path, fill: &Fill) {
+        self.trace(path);
+        match *fill {
+            Fill::Plain { colour, opacity } => {
+                self.context.set_global_alpha(opacity);
+                self.context.set_fill_style_str(&colour.css());
+                self.context.fill();
+                self.context.set_global_alpha(1.0);
+            }
+            Fill::Linear { from, to, stops } => {
+                let gradient = self.context.create_linear_gradient(from.0, from.1, to.0, to.1);
+                self.fill_with(&gradient, stops);
+            }
+            Fill::Radial { centre: (x, y), radius, stops } => {
+                if let Ok(gradient) = self.context.create_radial_gradient(x, y, 0.0, x, y, radius) {
+                    self.fill_with(&gradient, stops);
+                }
+            }
+        }
     }
 
-    fn line(&mut self, points: &[(f64, f64)], stroke: Stroke) {
-        self.context.set_stroke_style_str(&css(stroke.colour));
-        self.context.set_line_width(stroke.width);
+    fn stroke(&mut self, path: &Path, stroke: &Stroke) {
+        self.trace(path);
         let dash: Array = stroke.dash.iter().map(|length| JsValue::from_f64(*length)).collect();
         let _ = self.context.set_line_dash(&dash);
-        self.path(points);
+        self.context.set_line_width(stroke.width);
+        self.context.set_stroke_style_str(&stroke.colour.css());
+        self.context.set_global_alpha(stroke.opacity);
         self.context.stroke();
+        self.context.set_global_alpha(1.0);
     }
 
-    fn text(&mut self, at: (f64, f64), text: &str, set: Type) {
-        self.set(set);
-        self.context.set_text_align(match set.anchor {
+    fn text(&mut self, text: &str, (x, y): Point, style: &TextStyle) {
+        self.set_font(style.size, style.weight);
+        self.context.set_text_align(match style.anchor {
             Anchor::Start => "left",
             Anchor::Middle => "center",
             Anchor::End => "right",
         });
-        self.context.set_fill_style_str(&css(set.colour));
-        let _ = self.context.fill_text(text, at.0, at.1);
+        if let Some(rim) = style.rim {
+            let _ = self.context.set_line_dash(&Array::new());
+            self.context.set_line_width(RIM);
+            self.context.set_stroke_style_str(&rim.css());
+            let _ = self.context.stroke_text(text, x, y);
+        }
+        self.context.set_fill_style_str(&style.colour.css());
+        let _ = self.context.fill_text(text, x, y);
     }
 
-    fn width_of(&self, text: &str, set: Type) -> f64 {
-        self.set(set);
+    fn text_width(&self, text: &str, size: f64, weight: Weight) -> f64 {
+        self.set_font(size, weight);
         self.context.measure_text(text).map_or(0.0, |metrics| metrics.width())
     }
-}
 
-fn css(colour: Colour) -> String {
-    format!("rgb({} {} {})", colour.0, colour.1, colour.2)
+    fn pixel_ratio(&self) -> f64 {
+        self.ratio
+    }
 }

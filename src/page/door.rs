@@ -133,6 +133,19 @@ impl Page {
         picture::draw(&mut canvas, name, (width, height), theme, &shown, time);
     }
 
+    /// The height that a picture looks best at, CSS px, for a width.
+    pub fn height(&self, name: &str, width: f64, system_word: &str) -> f64 {
+        self.solved
+            .as_ref()
+            .map_or(0.0, |solved| picture::height(name, width, &Shown::new(solved, system(system_word))))
+    }
+
+    /// What there is to see in a picture at a time, s, in words.
+    pub fn description(&self, name: &str, time: f64, system_word: &str) -> String {
+        let Some(solved) = &self.solved else { return String::new() };
+        picture::description(name, &Shown::new(solved, system(system_word)), time)
+    }
+
     /// The numbers of a picture at a time, s: `{caption, columns, rows}`.
     pub fn table(&self, name: &str, time: f64, system_word: &str) -> JsValue {
         let Some(solved) = &self.solved else { return JsValue::NULL };

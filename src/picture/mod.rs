@@ -1,24 +1,40 @@
-//! Pictures: one drawing code behind a small painter trait.
+//! Pictures: columns of numbers onto a painter.
 //!
-//! Drawing takes columns of numbers and a painter and knows no scenario; `gather` makes the columns.
+//! Each picture is a struct of plain columns, in the units that are shown, and is a [`Picture`]: it draws itself at
+//! a given size, says in words what it shows, and gives its numbers as a table. Drawing knows no scenario and no
+//! answer; `gather` alone makes the columns from one.
 
-mod axis;
+mod colour;
 mod curve;
+mod free;
 mod gather;
+mod layers;
+mod number;
 mod painter;
 mod palette;
+mod pen;
+mod plot;
 mod profile;
 mod section;
+mod spread;
 mod svg;
 mod table;
+#[cfg(test)]
+mod testing;
+mod time_axis;
+mod widths;
 
-pub use curve::{Curve, CurveLine, curve};
+pub use colour::Colour;
+pub use curve::{Cursor, Curve, CurveLine, Event, EventKind, Limit};
 pub use gather::Shown;
-pub use painter::{Anchor, Colour, Painter, Stroke, Type};
-pub use palette::{Theme, ramp};
-pub use profile::{Profile, ProfileLayer, profile};
-pub use section::{Outline, Section, SectionLayer, section};
-pub use svg::Svg;
+pub use layers::LayerColumns;
+pub use painter::{
+    Anchor, Fill, Painter, Path, Point, RIM, Rect, Step, Stroke, TextStyle, Weight, on_circle,
+};
+pub use palette::{Inks, Theme};
+pub use profile::Profile;
+pub use section::{Hollow, Outline, Section};
+pub use svg::SvgPainter;
 pub use table::Table;
 
 use crate::Solved;
@@ -28,45 +44,74 @@ use crate::units::quantity::System;
 /// The pictures there are.
 pub const NAMES: [&str; 3] = ["section", "curve", "profile"];
 
+/// Something that can be drawn, described and tabled.
+pub trait Picture {
+    /// What it is, in a few words.
+    fn title(&self) -> String;
+
+    /// What there is to see, in a sentence or two, for those who cannot.
+    fn description(&self) -> String;
+
+    /// The height it looks best at, CSS pixels, for a width.
+    fn height(&self, width: f64) -> f64;
+
+    /// Draws it into the box from (0, 0) to (`width`, `height`), CSS pixels; 240 by 120 or more.
+    fn draw(&self, painter: &mut dyn Painter, inks: &Inks, width: f64, height: f64);
+
+    /// The numbers behind it.
+    fn table(&self) -> Table;
+}
+
+/// A picture as a standalone SVG file, on the paper of its theme. `id` begins every id in it.
+pub fn svg(picture: &dyn Picture, theme: Theme, id: &str, width: f64, height: f64) -> String {
+    let inks = theme.inks();
+    let mut painter = SvgPainter::new(id, width, height);
+    let paper = Fill::Plain { colour: inks.paper, opacity: 1.0 };
+    painter.fill(&Path::rect(Rect::new(0.0, 0.0, width, height)), &paper);
+    picture.draw(&mut painter, inks, width, height);
+    painter.finish(&picture.title(), &picture.description())
+}
+
 /// Draws one of the pictures at a moment, s; an unknown name draws nothing.
 pub fn draw(on: &mut dyn Painter, name: &str, size: (f64, f64), theme: Theme, shown: &Shown<'_>, time: f64) {
-    let now = shown.temperatures(time);
-    match name {
-        "section" => section(on, size.0, size.1, theme, &shown.section(&now)),
-        "curve" => curve(on, size.0, size.1, theme, &shown.curve(Some(time))),
-        "profile" => {
-            let start = shown.temperatures(0.0);
-            profile(on, size.0, size.1, theme, &shown.profile(&now, &start));
-        }
-        _ => {}
-    }
+    shown.picture(name, time, &mut |picture| picture.draw(on, theme.inks(), size.0, size.1));
+}
+
+/// The height a picture looks best at, CSS pixels, for a width; 0 for an unknown name.
+pub fn height(name: &str, width: f64, shown: &Shown<'_>) -> f64 {
+    let mut height = 0.0;
+    shown.picture(name, 0.0, &mut |picture| height = picture.height(width));
+    height
+}
+
+/// What there is to see in one of the pictures at a moment, s, in words.
+pub fn description(name: &str, shown: &Shown<'_>, time: f64) -> String {
+    let mut words = String::new();
+    shown.picture(name, time, &mut |picture| words = picture.description());
+    words
 }
 
 /// The numbers of one of the pictures at a moment, s.
 pub fn table(name: &str, shown: &Shown<'_>, time: f64) -> Table {
-    match name {
-        "curve" => shown.curve_table(),
-        "section" => shown.places_table(time, "The item cut open"),
-        _ => shown.places_table(time, "From the inside to the outside"),
-    }
-}
-
-/// One picture as SVG on light paper.
-pub fn as_svg(name: &str, size: (f64, f64), shown: &Shown<'_>, time: f64) -> String {
-    let mut on = Svg::new(size.0, size.1, &table(name, shown, time).caption, Theme::Light.inks().paper);
-    draw(&mut on, name, size, Theme::Light, shown, time);
-    on.finish()
+    let mut table = Table::default();
+    shown.picture(name, time, &mut |picture| table = picture.table());
+    table
 }
 
 /// All pictures of an answer as (name, SVG), at the moment that was asked for.
 pub fn sheets(solved: &Solved) -> Vec<(&'static str, String)> {
     let shown = Shown::new(solved, System::Metric);
     let asked = [&solved.report.ready, &solved.report.standing].into_iter().flatten();
-    let time = asked.filter_map(|outcome| match outcome {
+    let mut times = asked.filter_map(|outcome| match outcome {
         Outcome::At { time_s, .. } => Some(*time_s),
         Outcome::Already { .. } | Outcome::Never { .. } | Outcome::NotWithin { .. } => None,
     });
-    let time = time.fold(None, |first, time| first.or(Some(time))).unwrap_or(0.0).min(shown.end());
-    let sizes = [(460.0, 340.0), (720.0, 360.0), (720.0, 260.0)];
-    NAMES.iter().zip(sizes).map(|(name, size)| (*name, as_svg(name, size, &shown, time))).collect()
+    let time = times.next().unwrap_or(0.0).min(shown.end());
+    let mut sheets = Vec::new();
+    for (name, width) in NAMES.into_iter().zip([480.0, 720.0, 720.0]) {
+        shown.picture(name, time, &mut |picture| {
+            sheets.push((name, svg(picture, Theme::Light, name, width, picture.height(width))));
+        });
+    }
+    sheets
 }

@@ -1,12 +1,12 @@
-//! The numbers of a picture, for those who cannot see it.
+//! The numbers behind a picture, for those who cannot see it or want to copy them.
 
-/// A table of text.
-#[derive(Clone, Debug, PartialEq, Eq, serde::Serialize)]
+/// A table; every row has as many entries as there are columns.
+#[derive(Clone, Debug, Default, PartialEq, Eq, serde::Serialize)]
 pub struct Table {
     /// What it shows.
     pub caption: String,
-    /// Heads of the columns.
+    /// Headings, with units.
     pub columns: Vec<String>,
-    /// One entry per column each.
+    /// Entries as they are shown.
     pub rows: Vec<Vec<String>>,
 }

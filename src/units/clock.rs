@@ -82,6 +82,11 @@ impl Clock {
         format!("{} {}", self.0.day(), &month[..3])
     }
 
+    /// "14:20"
+    pub fn hour_minute(self) -> String {
+        self.time()
+    }
+
     /// Time of day, s after midnight.
     pub fn since_midnight(self) -> f64 {
         let t = self.0;
@@ -116,6 +121,9 @@ mod tests {
         assert_eq!(ready.weekday_time(), "Tuesday 14:20");
         assert_eq!(ready.short(), "Tue 14:20");
         assert_eq!(ready.date_time(), "Tuesday 3 March 2026, 14:20");
+        assert_eq!(ready.hour_minute(), "14:20");
+        // Whole seconds below 2^53: exact.
+        assert!((ready.since_midnight() - 51_600.0).abs() < f64::EPSILON);
     }
 
     #[test]

@@ -96,7 +96,13 @@ test("what is typed wrong keeps standing with its message, and the last answer s
   assert.equal(await field().inputValue(), "four hundred");
   await field().fill("-400 mm");
   await answered(tab);
-  const message = await field().evaluate((input) => input.getAttribute("aria-describedby").split(" ").map((id) => document.getElementById(id)?.textContent ?? "").join(" "));
+  const message = await field().evaluate((input) =>
+    input
+      .getAttribute("aria-describedby")
+      .split(" ")
+      .map((id) => document.getElementById(id)?.textContent ?? "")
+      .join(" "),
+  );
   assert.match(message, /above 0/);
   await field().fill("400 mm");
   await answered(tab);

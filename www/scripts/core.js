@@ -8,11 +8,15 @@ const core = {
   /** What the core said when it failed; empty while all is well. */
   bug: "",
 
-  /** Takes the program out of the page and starts it. */
-  start() {
+  /** Takes the program out of the page, unpacks it and starts it. */
+  async start() {
     const text = atob(dom.byId("core", HTMLScriptElement).textContent.trim());
-    const bytes = new Uint8Array(text.length);
-    for (let i = 0; i < text.length; i += 1) bytes[i] = text.charCodeAt(i);
+    const packed = new Uint8Array(text.length);
+    for (let i = 0; i < text.length; i += 1) packed[i] = text.charCodeAt(i);
+    const unpacked = new Blob([packed])
+      .stream()
+      .pipeThrough(new DecompressionStream("deflate-raw"));
+    const bytes = await new Response(unpacked).arrayBuffer();
     wasm_bindgen.initSync({ module: new WebAssembly.Module(bytes) });
     core.page = new wasm_bindgen.Page();
   },

@@ -2,8 +2,8 @@
 
 /** Starts the page. */
 const main = {
-  start() {
-    core.start();
+  async start() {
+    await core.start();
     const kept = store.load();
     const text = kept.text || (files.examples()[0]?.text ?? "");
     scenario.tree = files.parse(text) ?? files.empty;
@@ -44,4 +44,4 @@ const main = {
   },
 };
 
-main.start();
+void main.start();

@@ -15,7 +15,7 @@ const pictures = {
   paper: { section: [270, 190], curve: [390, 230], profile: [675, 200] },
 
   /**
-   * The canvases there are, what they show and how large they are.
+   * The canvases there are, what they show and how wide they are.
    * @type {Map<HTMLCanvasElement, Picture>}
    */
   shown: new Map(),
@@ -118,26 +118,28 @@ const pictures = {
    * @returns {HTMLElement}
    */
   figure(name) {
-    return dom.find(document, `[data-picture="${name}"]`, HTMLElement);
+    return dom.find(document, `.picture[data-picture="${name}"]`, HTMLElement);
   },
 
   /**
    * @param {HTMLCanvasElement} canvas
    * @param {Picture} picture
    */
-  drawOn(canvas, { name, size }) {
-    const [width, height] = pictures.printing ? pictures.paper[name] : size;
+  drawOn(canvas, { name, width: across }) {
+    const [paperWidth] = pictures.paper[name];
+    const width = pictures.printing ? paperWidth : across;
+    if (width === 0) return;
+    const height = pictures.height(name, width);
     const ratio = pictures.printing
       ? pictures.paperRatio
       : window.devicePixelRatio;
     const context = canvas.getContext("2d");
-    if (width === 0 || height === 0 || context === null) return;
-    const [across, down] = [width, height].map((side) =>
-      Math.round(side * ratio),
-    );
-    // A canvas that is given a size loses what it had in store, even if it is the same.
-    if (canvas.width !== across) canvas.width = across ?? 0;
-    if (canvas.height !== down) canvas.height = down ?? 0;
+    if (height === 0 || context === null) return;
+    canvas.style.height = `${height}px`;
+    // A canvas that is given a size is cleared and made anew, even if it is the same.
+    const pixels = [width, height].map((side) => Math.round(side * ratio));
+    if (canvas.width !== pixels[0]) canvas.width = pixels[0] ?? 0;
+    if (canvas.height !== pixels[1]) canvas.height = pixels[1] ?? 0;
     core.ask(
       (page) =>
         page.draw(
@@ -152,6 +154,17 @@ const pictures = {
         ),
       undefined,
     );
+  },
+
+  /**
+   * The height that suits a picture of this width.
+   * @param {PictureName} name
+   * @param {number} width
+   * @returns {number}
+   */
+  height(name, width) {
+    if (pictures.printing) return pictures.paper[name][1];
+    return core.ask((page) => page.height(name, width, store.system), 0);
   },
 
   /** @returns {Theme} */
@@ -170,13 +183,17 @@ const pictures = {
     const figure = pictures.figure(name);
     /** @type {NumberTable} */
     const empty = { caption: "", columns: [], rows: [] };
+    const seen = core.ask(
+      (page) => page.description(name, pictures.time, store.system),
+      "",
+    );
+    dom
+      .find(figure, "canvas", HTMLCanvasElement)
+      .setAttribute("aria-label", seen);
+    if (!dom.find(figure, "details", HTMLDetailsElement).open) return;
     const { caption, columns, rows } =
       core.ask((page) => page.table(name, pictures.time, store.system), null) ??
       empty;
-    dom
-      .find(figure, "canvas", HTMLCanvasElement)
-      .setAttribute("aria-label", caption);
-    if (!dom.find(figure, "details", HTMLDetailsElement).open) return;
     const head = dom.make("tr");
     head.append(
       ...columns.map((words) =>
@@ -216,24 +233,24 @@ const pictures = {
         "canvas",
         HTMLCanvasElement,
       );
-      const [width, height] = pictures.paper[name];
+      const [width] = pictures.paper[name];
       style.width = onPaper ? `${width}px` : "";
-      style.height = onPaper ? `${height}px` : "";
     }
     pictures.draw();
   },
 
   /**
-   * A canvas has another size: drawn anew for it, before it is shown.
+   * There is another width to draw on.
    * @param {ResizeObserverEntry[]} entries
    */
   resize(entries) {
     for (const { target, contentRect } of entries) {
-      if (!(target instanceof HTMLCanvasElement)) continue;
-      const picture = pictures.shown.get(target);
+      const canvas = target.nextElementSibling;
+      if (!(canvas instanceof HTMLCanvasElement)) continue;
+      const picture = pictures.shown.get(canvas);
       if (picture === undefined) continue;
-      picture.size = [contentRect.width, contentRect.height];
-      if (answer.report !== null) pictures.drawOn(target, picture);
+      picture.width = contentRect.width;
+      if (answer.report !== null) pictures.drawOn(canvas, picture);
     }
   },
 
@@ -243,22 +260,21 @@ const pictures = {
       pictures.follows = false;
       pictures.move((Number(slider.value) / pictures.steps) * pictures.end);
     });
-    const sizes = new ResizeObserver(pictures.resize);
-    const show = (
-      /** @type {HTMLCanvasElement} */ canvas,
-      /** @type {PictureName} */ name,
-    ) => {
-      pictures.shown.set(canvas, { name, size: [0, 0] });
-      sizes.observe(canvas);
-    };
+    const widths = new ResizeObserver(pictures.resize);
+    for (const breadth of dom.all(document, ".breadth")) {
+      const canvas = breadth.nextElementSibling;
+      if (!(canvas instanceof HTMLCanvasElement)) continue;
+      const figure = canvas.closest("figure");
+      const name = /** @type {PictureName} */ (figure?.dataset["picture"]);
+      pictures.shown.set(canvas, { name, width: 0 });
+      widths.observe(breadth);
+    }
     for (const name of pictures.names) {
       const figure = pictures.figure(name);
-      show(dom.find(figure, "canvas", HTMLCanvasElement), name);
       dom
         .find(figure, "details", HTMLDetailsElement)
         .addEventListener("toggle", () => pictures.showTable(name));
     }
-    show(dom.byId("sketch", HTMLCanvasElement), "section");
     matchMedia("(prefers-color-scheme: dark)").addEventListener("change", () =>
       pictures.draw(),
     );
