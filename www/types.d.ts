@@ -174,6 +174,12 @@ interface Door {
 
 declare const wasm_bindgen: Door;
 
+/** What a canvas shows, and its width in CSS px. */
+interface Picture {
+  name: PictureName;
+  width: number;
+}
+
 /** What is kept from one opening of the page to the next. */
 interface Kept {
   /** The scenario as it was left. */

@@ -58,7 +58,6 @@ const answer = {
     dom
       .byId("conditions", HTMLElement)
       .replaceChildren(...rows.map(answer.outcome));
-    dom.byId("foot", HTMLElement).textContent = report.headline;
     answer.showList("cautions", report.cautions);
     answer.showWarnings(report.warnings);
     dom
@@ -200,20 +199,28 @@ const answer = {
     dom
       .byId("troubles-list", HTMLElement)
       .replaceChildren(...errors.map(answer.linked));
-    if (answer.report !== null) {
-      const { headline } = answer.report;
-      dom.byId("foot", HTMLElement).textContent = stale
-        ? `The last answer: ${headline}`
-        : headline;
-      document.title = stale ? "Stillheat" : `${headline} · Stillheat`;
-      return;
-    }
-    const words = "No answer yet";
-    dom.byId("answer-headline", HTMLOutputElement).replaceChildren(words);
+    if (answer.report === null) answer.showNone();
+    const headline = answer.report?.headline ?? "No answer yet";
+    answer.showLine(stale ? `The last answer: ${headline}` : headline);
+  },
+
+  /**
+   * The one line that stays in view, and the name of the page.
+   * @param {string} line
+   */
+  showLine(line) {
+    dom.byId("foot", HTMLElement).textContent = line;
+    const title = `${line} · Stillheat`;
+    if (document.title !== title) document.title = title;
+  },
+
+  /** There is no answer, and there has been none. */
+  showNone() {
+    dom
+      .byId("answer-headline", HTMLOutputElement)
+      .replaceChildren("No answer yet");
     dom.byId("answer-detail", HTMLElement).textContent = "";
     dom.byId("conditions", HTMLElement).replaceChildren();
-    dom.byId("foot", HTMLElement).textContent = words;
-    document.title = "Stillheat";
   },
 
   /**
@@ -303,7 +310,7 @@ const answer = {
     dom.byId("answer-headline", HTMLOutputElement).replaceChildren(words);
     dom.byId("answer-detail", HTMLElement).textContent =
       `Your entries are all here. Please save the scenario and hand it on with these words, so that it can be mended: ${core.bug}`;
-    dom.byId("foot", HTMLElement).textContent = words;
+    answer.showLine(words);
     dom.byId("conditions", HTMLElement).replaceChildren();
     for (const id of ["pictures", "sure", "cautions", "troubles"])
       dom.byId(id, HTMLElement).hidden = true;

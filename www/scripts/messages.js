@@ -53,7 +53,7 @@ const messages = {
    * @param {string} said empty where there is nothing to say
    */
   complain(field, said) {
-    field.message.textContent = said;
+    if (field.message.textContent !== said) field.message.textContent = said;
     field.message.classList.remove("needed");
     if (said === "") field.control.removeAttribute("aria-invalid");
     else field.control.setAttribute("aria-invalid", "true");

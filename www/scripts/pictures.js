@@ -14,6 +14,12 @@ const pictures = {
   /** Width and height on paper, in pixels of the page. @type {Record<PictureName, [number, number]>} */
   paper: { section: [270, 190], curve: [390, 230], profile: [675, 200] },
 
+  /**
+   * The canvases there are, what they show and how wide they are.
+   * @type {Map<HTMLCanvasElement, Picture>}
+   */
+  shown: new Map(),
+
   /** The time that is shown, s after the stop. */
   time: 0,
 
@@ -101,14 +107,10 @@ const pictures = {
   /** All pictures anew. */
   draw() {
     if (answer.report === null) return;
-    for (const name of pictures.names) {
-      const figure = pictures.figure(name);
-      pictures.drawOn(dom.find(figure, "canvas", HTMLCanvasElement), name);
-      pictures.showTable(figure, name);
+    for (const [canvas, picture] of pictures.shown) {
+      pictures.drawOn(canvas, picture);
     }
-    const sketch = dom.byId("sketch", HTMLCanvasElement);
-    if (sketch.clientWidth > 0 && !pictures.printing)
-      pictures.drawOn(sketch, "section");
+    for (const name of pictures.names) pictures.showTable(name);
   },
 
   /**
@@ -116,39 +118,53 @@ const pictures = {
    * @returns {HTMLElement}
    */
   figure(name) {
-    return dom.find(document, `[data-picture="${name}"]`, HTMLElement);
+    return dom.find(document, `.picture[data-picture="${name}"]`, HTMLElement);
   },
 
   /**
    * @param {HTMLCanvasElement} canvas
-   * @param {PictureName} name
+   * @param {Picture} picture
    */
-  drawOn(canvas, name) {
-    const [paperWidth, paperHeight] = pictures.paper[name];
-    const width = pictures.printing ? paperWidth : canvas.clientWidth;
-    const height = pictures.printing
-      ? paperHeight
-      : core.ask((page) => page.height(name, width, store.system), 0);
-    if (!pictures.printing) canvas.style.height = `${height}px`;
+  drawOn(canvas, { name, width: across }) {
+    const [paperWidth] = pictures.paper[name];
+    const width = pictures.printing ? paperWidth : across;
+    if (width === 0) return;
+    const height = pictures.height(name, width);
     const ratio = pictures.printing
       ? pictures.paperRatio
       : window.devicePixelRatio;
     const context = canvas.getContext("2d");
-    if (width === 0 || height === 0 || context === null) return;
-    canvas.width = Math.round(width * ratio);
-    canvas.height = Math.round(height * ratio);
-    const draw = (/** @type {Page} */ page) =>
-      page.draw(
-        name,
-        context,
-        width,
-        height,
-        ratio,
-        pictures.time,
-        pictures.theme(),
-        store.system,
-      );
-    core.ask(draw, undefined);
+    if (height === 0 || context === null) return;
+    canvas.style.height = `${height}px`;
+    // A canvas that is given a size is cleared and made anew, even if it is the same.
+    const pixels = [width, height].map((side) => Math.round(side * ratio));
+    if (canvas.width !== pixels[0]) canvas.width = pixels[0] ?? 0;
+    if (canvas.height !== pixels[1]) canvas.height = pixels[1] ?? 0;
+    core.ask(
+      (page) =>
+        page.draw(
+          name,
+          context,
+          width,
+          height,
+          ratio,
+          pictures.time,
+          pictures.theme(),
+          store.system,
+        ),
+      undefined,
+    );
+  },
+
+  /**
+   * The height that suits a picture of this width.
+   * @param {PictureName} name
+   * @param {number} width
+   * @returns {number}
+   */
+  height(name, width) {
+    if (pictures.printing) return pictures.paper[name][1];
+    return core.ask((page) => page.height(name, width, store.system), 0);
   },
 
   /** @returns {Theme} */
@@ -161,10 +177,10 @@ const pictures = {
 
   /**
    * The same numbers for those who cannot see the picture; only made when they are looked at.
-   * @param {HTMLElement} figure
    * @param {PictureName} name
    */
-  showTable(figure, name) {
+  showTable(name) {
+    const figure = pictures.figure(name);
     /** @type {NumberTable} */
     const empty = { caption: "", columns: [], rows: [] };
     const seen = core.ask(
@@ -217,11 +233,25 @@ const pictures = {
         "canvas",
         HTMLCanvasElement,
       );
-      const [width, height] = pictures.paper[name];
+      const [width] = pictures.paper[name];
       style.width = onPaper ? `${width}px` : "";
-      style.height = onPaper ? `${height}px` : "";
     }
     pictures.draw();
+  },
+
+  /**
+   * There is another width to draw on.
+   * @param {ResizeObserverEntry[]} entries
+   */
+  resize(entries) {
+    for (const { target, contentRect } of entries) {
+      const canvas = target.nextElementSibling;
+      if (!(canvas instanceof HTMLCanvasElement)) continue;
+      const picture = pictures.shown.get(canvas);
+      if (picture === undefined) continue;
+      picture.width = contentRect.width;
+      if (answer.report !== null) pictures.drawOn(canvas, picture);
+    }
   },
 
   listen() {
@@ -230,14 +260,20 @@ const pictures = {
       pictures.follows = false;
       pictures.move((Number(slider.value) / pictures.steps) * pictures.end);
     });
-    const sizes = new ResizeObserver(() => pictures.draw());
-    sizes.observe(dom.byId("sketch", HTMLElement));
+    const widths = new ResizeObserver(pictures.resize);
+    for (const breadth of dom.all(document, ".breadth")) {
+      const canvas = breadth.nextElementSibling;
+      if (!(canvas instanceof HTMLCanvasElement)) continue;
+      const figure = canvas.closest("figure");
+      const name = /** @type {PictureName} */ (figure?.dataset["picture"]);
+      pictures.shown.set(canvas, { name, width: 0 });
+      widths.observe(breadth);
+    }
     for (const name of pictures.names) {
       const figure = pictures.figure(name);
-      sizes.observe(dom.find(figure, "canvas", HTMLCanvasElement));
       dom
         .find(figure, "details", HTMLDetailsElement)
-        .addEventListener("toggle", () => pictures.showTable(figure, name));
+        .addEventListener("toggle", () => pictures.showTable(name));
     }
     matchMedia("(prefers-color-scheme: dark)").addEventListener("change", () =>
       pictures.draw(),
