@@ -1,6 +1,6 @@
 //! Flags above the plot: each event has a pole at its time and its words beside the top of the pole.
 
-use super::super::painter::{Anchor, Rect, Weight};
+use super::super::painter::{Anchor, Weight};
 use super::super::pen::Pen;
 
 /// A flag, placed.
@@ -65,10 +65,5 @@ impl Flag {
     /// Where its words begin or end, px.
     pub fn words_at(&self) -> f64 {
         if self.anchor == Anchor::Start { self.x + GAP } else { self.x - GAP }
-    }
-
-    /// The box of its pole within the plot, for labels to keep off.
-    pub fn pole(&self, area: &Rect) -> Rect {
-        Rect { left: self.x - 2.0, right: self.x + 2.0, ..*area }
     }
 }

@@ -91,6 +91,8 @@ pub struct Cursor<'a> {
 const PAD: f64 = 0.06;
 /// No temperature axis shows less than this, in degrees.
 const LEAST_SPAN: f64 = 2.0;
+/// Half the size of an event's mark with its rim, px.
+const EVENT_MARK: f64 = 6.5;
 /// Distance from one row of text to the next, as part of the font size.
 const PITCH: f64 = 1.45;
 
@@ -198,7 +200,11 @@ impl Curve<'_> {
             taken.spare(line);
         }
         for flag in flags {
-            taken.keep_off(flag.pole(&plot.area));
+            taken.spare(&[(flag.x, plot.area.top), (flag.x, plot.area.bottom)]);
+            if let Some(value) = self.events[flag.event].value.filter(|value| value.is_finite()) {
+                let y = plot.y(value);
+                taken.keep_off(Rect { left: flag.x, right: flag.x, top: y, bottom: y }.grown(EVENT_MARK));
+            }
         }
         for limit in self.limits.iter().filter(|limit| limit.value.is_finite()) {
             taken.spare(&[(plot.area.left, plot.y(limit.value)), (plot.area.right, plot.y(limit.value))]);
@@ -210,15 +216,15 @@ impl Curve<'_> {
             let wide = pen.width(&words, Weight::Regular);
             let off = 0.62 * pen.size + 2.0;
             let y = plot.y(limit.value);
-            let steps = (0..=8).map(|i| f64::from(i) / 8.0);
-            let places = steps.flat_map(|part| {
-                let x = plot.area.left + 6.0 + part * (room - wide);
-                [(x, y - off), (x, y + off)]
-            });
-            let boxes: Vec<(Point, Rect)> = places.map(|at| (at, pen.text_box(&words, at, &hand))).collect();
-            if !words.is_empty()
-                && let Some(at) = taken.best(boxes.into_iter(), &plot.area)
-            {
+            let places = |off: f64| {
+                let across = (0..=8).map(|i| plot.area.left + 6.0 + f64::from(i) / 8.0 * (room - wide));
+                let at = across.flat_map(|x| [(x, y - off), (x, y + off)]);
+                at.map(|at| (at, pen.text_box(&words, at, &hand))).collect::<Vec<(Point, Rect)>>()
+            };
+            let (near, far) = (places(off), places(off + pen.size + 4.0));
+            let found =
+                taken.best(near.into_iter(), &plot.area).or_else(|| taken.best(far.into_iter(), &plot.area));
+            if let Some(at) = found.filter(|_| !words.is_empty()) {
                 pen.write(&words, at, &hand);
             }
         }
@@ -329,8 +335,8 @@ fn draw_event_mark(pen: &mut Pen, (x, y): Point, kind: EventKind) {
         EventKind::Ready => Path::circle((x, y), half),
         EventKind::Standing => Path::rect(Rect::new(x - half, y - half, 2.0 * half, 2.0 * half)),
     };
-    pen.fill(&outline(6.5), pen.inks.paper);
-    pen.fill(&outline(5.0), pen.inks.ink);
+    pen.fill(&outline(EVENT_MARK), pen.inks.paper);
+    pen.fill(&outline(EVENT_MARK - 1.5), pen.inks.ink);
 }
 
 impl Picture for Curve<'_> {

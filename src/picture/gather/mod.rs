@@ -10,6 +10,9 @@ use crate::units::display::length_words;
 use crate::units::quantity::System;
 use crate::units::words;
 
+/// From here on a weekday says too little, s: a day less than a week.
+const WEEK: f64 = 6.0 * 86_400.0;
+
 /// An answer, ready to be shown in some units.
 pub struct Shown<'a> {
     solved: &'a Solved,
@@ -118,9 +121,13 @@ impl<'a> Shown<'a> {
         }
     }
 
-    /// The moment in few words: "Tue 14:20", or "8 h 20 min" where the stop has no date.
+    /// The moment in few words: "Tue 14:20", over more than a week "Tue 3 Mar 14:20"; or "8 h 20 min" where the
+    /// stop has no date.
     fn short_words(&self, time: f64) -> String {
         match self.solved.checked.clock.and_then(|clock| clock.after(time)) {
+            Some(then) if self.end() > WEEK => {
+                format!("{} {} {}", &then.short()[..3], then.day(), then.hour_minute())
+            }
             Some(then) => then.short(),
             None => words::duration(time),
         }

@@ -214,7 +214,7 @@ impl Picture for Section<'_> {
     fn height(&self, width: f64) -> f64 {
         let pitch = (PITCH * font_size(width)).round();
         let rows = (rows::count(self) as f64 + 0.5) * pitch;
-        rows.max((0.5 * width).clamp(150.0, 230.0)).round() + BELOW + scale_bar::HEIGHT + pitch
+        rows.max((0.5 * width).clamp(150.0, 260.0)).round() + BELOW + scale_bar::HEIGHT + pitch
     }
 
     fn draw(&self, painter: &mut dyn Painter, inks: &Inks, width: f64, height: f64) {
