@@ -211,7 +211,8 @@ mod tests {
         let later = followed(false, &[at(7.0, true)]);
         let found = any_of(&[never.clone(), later], Ending::Until);
         assert_eq!(found, Verdict::At { moment: at(7.0, true), lost: None, for_good: None });
-        assert_eq!(any_of(&[never.clone()], Ending::Until), Verdict::NotWithin);
-        assert_eq!(any_of(&[never], Ending::Settled), Verdict::Never);
+        let alone = std::slice::from_ref(&never);
+        assert_eq!(any_of(alone, Ending::Until), Verdict::NotWithin);
+        assert_eq!(any_of(alone, Ending::Settled), Verdict::Never);
     }
 }

@@ -207,7 +207,8 @@ pub fn checks(
         let half = words::duration(0.5 * (moment.high - moment.low));
         let mut text = format!("{} ± {half}", when(moment.time, clock));
         if moment.time > 0.0 {
-            text += &format!(" ({} %)", short(50.0 * (moment.high - moment.low) / moment.time));
+            let share = short(50.0 * (moment.high - moment.low) / moment.time);
+            text = format!("{text} ({share} %)");
         }
         all.push(("Error of the calculation itself", text));
     }

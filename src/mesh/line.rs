@@ -180,7 +180,7 @@ mod tests {
             (Shape::Cylinder { inner_radius: 0.0 }, PI * 0.59 * 0.59, 2.0 * PI * 0.59),
             (
                 Shape::Sphere { inner_radius: 0.1 },
-                4.0 / 3.0 * PI * (0.69f64.powi(3) - 0.001),
+                4.0 / 3.0 * PI * (0.69 * 0.69 * 0.69 - 0.001),
                 4.0 * PI * 0.69 * 0.69,
             ),
         ];

@@ -40,7 +40,7 @@ impl Entry {
 /// One sentence that says why the text could not be read.
 pub fn read(text: &str, kind: &str, system: System) -> Result<Value, String> {
     match Entry::named(kind).ok_or_else(|| format!("no field is of the kind {kind}"))? {
-        Entry::Quantity(kind) => quantity(text, kind, system),
+        Entry::Quantity(kind) | Entry::Property(kind) => quantity(text, kind, system),
         Entry::Property(kind) if text.contains(':') => {
             let (at, values) = columns(text, Kind::Temperature, kind, system)?;
             Ok(json!({"at_c": at, "values": values}))
@@ -49,7 +49,6 @@ pub fn read(text: &str, kind: &str, system: System) -> Result<Value, String> {
             let (coefficients, from, to) = read_polynomial(text)?;
             Ok(json!({"polynomial_in_c": coefficients, "from_c": from, "to_c": to}))
         }
-        Entry::Property(kind) => quantity(text, kind, system),
         Entry::OverTime(kind, key) => {
             let (at, values) = columns(text, Kind::Duration, kind, system)?;
             Ok(json!({"at_s": at, key: values}))
@@ -166,9 +165,7 @@ mod tests {
     #[test]
     fn a_number_steps_and_a_table_does_not() {
         let up = |text, kind| step(text, kind, System::Metric, true, false);
-        assert!(
-            up("400 mm", "length").is_some_and(|text| text.ends_with(" mm") && text > "400 mm".to_owned())
-        );
+        assert!(up("400 mm", "length").is_some_and(|text| text.ends_with(" mm") && text.as_str() > "400 mm"));
         assert_eq!(up("0 h: 18 °C; 6 h: 12 °C", "temperature-table"), None);
     }
 

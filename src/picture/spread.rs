@@ -71,6 +71,7 @@ mod tests {
             (state >> 40) as f64 / f64::from(1 << 24)
         };
         for _ in 0..2_000 {
+            #[allow(clippy::cast_possible_truncation, clippy::cast_sign_loss, reason = "0 to 11")]
             let count = 1 + (random() * 12.0).floor() as usize;
             let mut places: Vec<f64> = (0..count).map(|_| random() * 200.0).collect();
             places.sort_by(f64::total_cmp);

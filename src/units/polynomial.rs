@@ -80,10 +80,11 @@ pub fn write_polynomial(coefficients: &[f64], from: f64, to: f64) -> String {
             text = format!("{number}");
         } else {
             text += if number.is_sign_negative() { " - " } else { " + " };
-            text += &format!("{}", number.abs());
+            text += &number.abs().to_string();
         }
         if !power.is_empty() {
-            text += &format!(" {power}");
+            text.push(' ');
+            text += power;
         }
     }
     format!("{text} from {from} to {to} °C")

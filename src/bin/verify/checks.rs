@@ -70,5 +70,9 @@ fn browsers(project: &Project) -> Result<(), Failure> {
     if !project.path("dist/stillheat.html").exists() {
         page(project)?;
     }
-    project.run(&mut Command::new("node").args(["--test", "--test-concurrency=1", "tests/browser/"]))
+    let folder = std::fs::read_dir(project.path("tests/browser")).map_err(|error| error.to_string())?;
+    let mut files: Vec<_> = folder.flatten().map(|entry| entry.path()).collect();
+    files.retain(|file| file.to_string_lossy().ends_with(".test.mjs"));
+    files.sort();
+    project.run(Command::new("node").args(["--test", "--test-concurrency=1"]).args(files))
 }

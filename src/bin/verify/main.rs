@@ -27,6 +27,9 @@ pub struct Project {
 
 impl Project {
     /// Runs a command in the project's folder; its output goes where ours goes.
+    ///
+    /// # Errors
+    /// The command and how it ended, where it did not end well.
     pub fn run(&self, command: &mut Command) -> Result<(), Failure> {
         let shown = format!("{command:?}");
         match command.current_dir(&self.root).status() {
