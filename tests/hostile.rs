@@ -11,8 +11,7 @@ mod texts;
 #[path = "hostile/values.rs"]
 mod values;
 
-use kit::{Row, good, take, with};
-use serde_json::json;
+use kit::{Row, good};
 
 /// The rows of all tables.
 fn rows() -> Vec<Row> {

@@ -40,7 +40,6 @@ impl Entry {
 /// One sentence that says why the text could not be read.
 pub fn read(text: &str, kind: &str, system: System) -> Result<Value, String> {
     match Entry::named(kind).ok_or_else(|| format!("no field is of the kind {kind}"))? {
-        Entry::Quantity(kind) | Entry::Property(kind) => quantity(text, kind, system),
         Entry::Property(kind) if text.contains(':') => {
             let (at, values) = columns(text, Kind::Temperature, kind, system)?;
             Ok(json!({"at_c": at, "values": values}))
@@ -49,6 +48,7 @@ pub fn read(text: &str, kind: &str, system: System) -> Result<Value, String> {
             let (coefficients, from, to) = read_polynomial(text)?;
             Ok(json!({"polynomial_in_c": coefficients, "from_c": from, "to_c": to}))
         }
+        Entry::Quantity(kind) | Entry::Property(kind) => quantity(text, kind, system),
         Entry::OverTime(kind, key) => {
             let (at, values) = columns(text, Kind::Duration, kind, system)?;
             Ok(json!({"at_s": at, key: values}))

@@ -13,7 +13,7 @@ before(async () => {
 after(() => browser.close());
 
 /** Goes by Tab to the control with this name, as somebody without a mouse does. */
-async function tabTo(tab, name) {
+async function tabTo(tab, ...names) {
   for (let i = 0; i < 250; i += 1) {
     await tab.keyboard.press("Tab");
     const found = await tab.evaluate(() => {
@@ -21,9 +21,9 @@ async function tabTo(tab, name) {
       const label = at?.id ? document.querySelector(`label[for="${at.id}"]`) : null;
       return at?.getAttribute("aria-label") ?? label?.textContent ?? at?.textContent ?? "";
     });
-    if (found.trim() === name) return;
+    if (names.includes(found.trim())) return;
   }
-  assert.fail(`no way by Tab to ${name}`);
+  assert.fail(`no way by Tab to ${names.join(" or ")}`);
 }
 
 /** Types over what stands in the field that has the focus. */
@@ -50,16 +50,14 @@ test("from an empty scenario to a saved file and back by keyboard alone", async 
   await write(tab, "180 °C");
   await tabTo(tab, "Its temperature");
   await write(tab, "20");
-  await tabTo(tab, "Film coefficient…");
-  await tab.keyboard.press("Enter");
+  await tabTo(tab, "Film coefficient", "Film coefficient…");
+  if (await tab.evaluate(() => document.activeElement.tagName === "BUTTON")) await tab.keyboard.press("Enter");
   await write(tab, "6 to 12");
-  await tabTo(tab, "Another condition");
-  await tab.keyboard.press("Enter");
   await tabTo(tab, "Limit");
   await write(tab, "45 °C");
   await answered(tab);
   const told = await headline(tab);
-  assert.match(told, /^Ready .* after the stop$/);
+  assert.match(told, /^Ready .* after the stop$/, await tab.locator("#troubles").innerText());
 
   const coming = tab.waitForEvent("download");
   await tab.keyboard.press("Control+S");

@@ -70,7 +70,8 @@ fn source(text: &str) -> String {
 
 /// SHA-256 as hexadecimal digits.
 pub fn sha256_hex(bytes: &[u8]) -> String {
-    Sha256::digest(bytes).iter().map(|byte| format!("{byte:02x}")).collect()
+    let digits: Vec<String> = Sha256::digest(bytes).iter().map(|byte| format!("{byte:02x}")).collect();
+    digits.concat()
 }
 
 fn replace_once(text: &str, from: &str, to: &str) -> Result<String, Box<dyn Error>> {
