@@ -18,7 +18,7 @@ mod types;
 
 pub use examples::{Example, examples};
 pub use nearest::nearest;
-pub use read::read;
+pub use read::{attempt, read};
 #[cfg(not(target_arch = "wasm32"))]
 pub use schema::schema;
 pub use types::*;
