@@ -212,6 +212,11 @@ pub fn figure(x: f64) -> String {
     if x == 0.0 || (1e-6..1e9).contains(&x.abs()) { x.to_string() } else { format!("{x:e}") }
 }
 
+/// A calculated number without the hair that binary fractions leave: 9 digits.
+pub fn rounded(x: f64) -> f64 {
+    format!("{x:.8e}").parse().unwrap_or(x)
+}
+
 /// A number in a message with its unit.
 pub fn quantity(x: f64, unit: &str) -> String {
     if unit.is_empty() { figure(x) } else { format!("{} {unit}", figure(x)) }

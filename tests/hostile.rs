@@ -1,9 +1,15 @@
 //! Damaged and hostile texts: each is refused with words, each problem names its place, nothing panics.
 
+#![cfg(not(target_arch = "wasm32"))]
+
+#[path = "hostile/anything.rs"]
+mod anything;
 #[path = "hostile/keys.rs"]
 mod keys;
 #[path = "hostile/kit.rs"]
 mod kit;
+#[path = "hostile/round_trip.rs"]
+mod round_trip;
 #[path = "hostile/rules.rs"]
 mod rules;
 #[path = "hostile/texts.rs"]

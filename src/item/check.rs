@@ -5,7 +5,7 @@ use super::check_layers::layers;
 use super::check_watch::{Places, conditions, probes};
 use super::{Item, Programme, Shape, Side, Start};
 use crate::matter::library::Material;
-use crate::problem::{Problem, Severity, Trouble, figure};
+use crate::problem::{Problem, Severity, Trouble, figure, rounded};
 use crate::scenario::limits::{PLACE_STEP, apart};
 use crate::scenario::{Number, Scenario, WrittenShape, WrittenStart, WrittenSteadyBefore};
 use crate::units::clock::Clock;
@@ -130,7 +130,7 @@ fn start(scenario: &Scenario, shape: Shape, thickness: f64, problems: &mut Vec<P
             let path = format!("/start/profile/{i}/from_inside_m");
             let at = figure(point.from_inside_m);
             let words = if point.from_inside_m > thickness * (1.0 + 1e-9) {
-                format!("{at} m is outside the item, which is {thickness} m thick")
+                format!("{at} m is outside the item, which is {} m thick", rounded(thickness))
             } else if i > 0 && !apart(points[i - 1].from_inside_m, point.from_inside_m, PLACE_STEP) {
                 let before = figure(points[i - 1].from_inside_m);
                 format!("{at} m does not come after {before} m by at least {PLACE_STEP} m")

@@ -4,7 +4,7 @@ use super::check_watch::WHOLE;
 use super::{Layer, Motion};
 use crate::matter::Law;
 use crate::matter::library::{self, Material, Phase};
-use crate::problem::{Limit, Problem, Trouble, quantity};
+use crate::problem::{Limit, Problem, Trouble, quantity, rounded};
 use crate::scenario::{WrittenLayer, WrittenMotion, WrittenProperty, limits, nearest};
 use crate::units::kelvin;
 
@@ -156,6 +156,7 @@ fn motion(written: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Op
 fn own(written: &WrittenProperty, limit: &Limit, path: &str, problems: &mut Vec<Problem>) -> Option<Law> {
     let law = law(written);
     let (lowest, highest) = law.extent();
+    let [lowest, highest] = [lowest, highest].map(rounded);
     let words = if !limit.holds(lowest) {
         format!("it falls to {} within its range; {limit}", quantity(lowest, limit.unit))
     } else if !limit.holds(highest) {

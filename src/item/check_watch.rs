@@ -1,7 +1,7 @@
 //! Probes and conditions: what is watched, and where.
 
 use super::{Condition, Probe, Region, Sense, Shape, Side, Watch};
-use crate::problem::{Problem, Trouble, figure};
+use crate::problem::{Problem, Trouble, figure, rounded};
 use crate::scenario::{Number, WrittenCondition, WrittenProbe, WrittenWhat, nearest};
 use crate::units::kelvin;
 
@@ -26,7 +26,7 @@ pub(super) fn probes(written: &[WrittenProbe], thickness: f64, problems: &mut Ve
             (None, outside) => ("from_outside_m", outside.unwrap_or(0.0)),
         };
         if distance > thickness * (1.0 + 1e-9) {
-            let distance = figure(distance);
+            let (distance, thickness) = (figure(distance), rounded(thickness));
             let words = format!("{distance} m is outside the item, which is {thickness} m thick");
             problems.push(Problem::error(format!("{path}/{key}"), Trouble::Contradiction { words }));
         }
@@ -166,8 +166,11 @@ fn probe(
 ) -> Option<(Watch, String)> {
     let found = places.probes.iter().find(|probe| Some(probe.name.as_str()) == of);
     if found.is_none() {
-        let names = places.probes.iter().map(|probe| probe.name.as_str());
-        let names: Vec<&str> = names.filter(|name| !name.is_empty()).collect();
+        let names: Vec<&str> = places.probes.iter().map(|probe| probe.name.as_str()).collect();
+        // The one that is meant may be the one whose name could not be read.
+        if names.contains(&"") {
+            return None;
+        }
         let trouble = match of {
             _ if names.is_empty() => {
                 Trouble::Missing { what: "no probe exists; add one to /probes".to_owned() }

@@ -8,6 +8,9 @@ use crate::problem::{Limit, Problem, Trouble, figure, printable};
 use serde_json::{Map, Value};
 use std::cell::RefCell;
 
+/// The keys of a number that is known roughly.
+pub const SPREAD: &[&str] = &["value", "low", "high"];
+
 /// A value and where it stands.
 #[derive(Clone)]
 pub struct At<'a> {
@@ -137,7 +140,7 @@ impl<'a> At<'a> {
         if !self.is_object() {
             return self.number(limit).map(Number::Plain);
         }
-        let fields = self.fields("a number", &["value", "low", "high"])?;
+        let fields = self.fields("a number", SPREAD)?;
         let part = |key, what| fields.needed(key, what).and_then(|at| at.number(limit));
         let value = part("value", "the likely value");
         let low = part("low", "hardly lower than this");

@@ -7,7 +7,7 @@ use serde_json::{Map, Value};
 use std::cell::RefCell;
 use std::fmt;
 
-/// Reads a JSON document; with it, the keys that stand twice in one object (the last of them is read).
+/// Reads a JSON document; with it, the keys that stand twice in one object (the first of them is read).
 ///
 /// # Errors
 /// Too large, no JSON (with line and column), or nested too deep.
@@ -142,8 +142,9 @@ impl<'de> Visitor<'de> for Seed<'_> {
             let value = from.next_value_seed(self.inner(Place::Key(&self.place, &key)))?;
             if object.contains_key(&key) {
                 self.found_again(&key);
+            } else {
+                object.insert(key, value);
             }
-            object.insert(key, value);
         }
         Ok(Value::Object(object))
     }
@@ -162,9 +163,9 @@ mod tests {
     }
 
     #[test]
-    fn a_key_that_stands_twice_is_told_and_the_last_is_read() {
+    fn a_key_that_stands_twice_is_told_and_the_first_is_read() {
         let (value, repeated) = parse(r#"{"a/b": [{"k": 1, "k": 2}]}"#).expect("it is JSON");
-        assert_eq!(value["a/b"][0]["k"], 2);
+        assert_eq!(value["a/b"][0]["k"], 1);
         let places: Vec<&str> = repeated.iter().map(|problem| problem.path.as_str()).collect();
         assert_eq!(places, ["/a~1b/0/k"]);
     }

@@ -1,6 +1,6 @@
 //! The file to a [`Scenario`]: all problems at once, each with its place.
 
-use super::at::At;
+use super::at::{At, SPREAD};
 use super::limits as limit;
 use super::types::{
     Number, Scenario, VERSION, WrittenCondition, WrittenItem, WrittenLayer, WrittenMotion, WrittenProbe,
@@ -42,6 +42,7 @@ pub(super) const PROFILE_POINT: &[&str] = &["from_inside_m", "temperature_c"];
 pub(super) const STEADY_BEFORE: &[&str] = &["contents_c", "inner", "outer"];
 pub(super) const PROBE: &[&str] = &["name", "from_inside_m", "from_outside_m"];
 pub(super) const CONDITION: &[&str] = &["what", "of", "below_c", "above_c", "below_k", "below_k_per_h"];
+pub(super) const CONDITION_LIMITS: &[&str] = &["below_c", "above_c", "below_k", "below_k_per_h"];
 
 /// Reads a scenario.
 ///
@@ -85,7 +86,7 @@ fn scenario(at: &At<'_>) -> Option<Scenario> {
         look_ahead_s: fields.get("look_ahead_s").and_then(|at| at.number(&limit::LOOK_AHEAD)),
         start: start.unwrap_or_default(),
         surroundings: surroundings.unwrap_or_default(),
-        probes: list("probes", "probes", limit::PROBES).iter().map(probe).collect(),
+        probes: fields.get("probes").map(|at| probes(&at)).unwrap_or_default(),
         ready_when: list("ready_when", "conditions", limit::CONDITIONS).iter().map(condition).collect(),
         must_not: list("must_not", "limits", limit::CONDITIONS).iter().map(condition).collect(),
         item: item?,
@@ -198,7 +199,7 @@ fn property(at: &At<'_>, limits: &'static Limit) -> Option<WrittenProperty> {
         }
         return Some(WrittenProperty::Polynomial { polynomial_in_c, from_c, to_c });
     }
-    if at.is_object() && !["value", "low", "high"].iter().any(|key| at.has(key)) {
+    if at.is_object() && !SPREAD.iter().any(|key| at.has(key)) {
         let [table, polynomial] = [PROPERTY_TABLE, PROPERTY_POLYNOMIAL].map(|keys| keys.join(", "));
         let words = format!(
             "an object here is a number (value, low, high), a table ({table}) or a polynomial ({polynomial})"
@@ -262,6 +263,13 @@ fn steady_before(at: &At<'_>) -> Option<WrittenSteadyBefore> {
     Some(WrittenSteadyBefore { contents_c, inner, outer: outer.unwrap_or_default() })
 }
 
+/// A list that cannot be read may hold any probe: it counts as one without a name.
+fn probes(at: &At<'_>) -> Vec<WrittenProbe> {
+    let any = WrittenProbe { name: String::new(), from_inside_m: None, from_outside_m: None };
+    at.list("probes", 0, limit::PROBES).map_or_else(|| vec![any], |list| list.iter().map(probe).collect())
+}
+
+/// One that cannot be read has no name.
 fn probe(at: &At<'_>) -> WrittenProbe {
     let fields = at.fields("a probe", PROBE);
     let get = |key| fields.as_ref()?.get(key);
@@ -300,10 +308,10 @@ fn condition(at: &At<'_>) -> WrittenCondition {
     ];
     let what = fields.needed("what", "what is watched").and_then(|at| at.word(&whats));
     let of = fields.get("of").map(|at| at.line(limit::NAME_LETTERS));
-    let limits: Vec<&str> = CONDITION[2..].iter().copied().filter(|key| at.has(key)).collect();
+    let limits: Vec<&str> = CONDITION_LIMITS.iter().copied().filter(|key| at.has(key)).collect();
     if limits.len() != 1 {
         let words = if limits.is_empty() {
-            format!("no limit is given; one of {}", CONDITION[2..].join(", "))
+            format!("no limit is given; one of {}", CONDITION_LIMITS.join(", "))
         } else {
             format!("{} are both given; a condition has one limit", limits.join(" and "))
         };

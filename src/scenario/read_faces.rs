@@ -1,9 +1,9 @@
 //! What the faces see, as written.
 
-use super::at::{At, Fields};
+use super::at::{At, Fields, SPREAD};
 use super::limits as limit;
 use super::types::{OverTimeC, OverTimeFlux, WrittenFace, WrittenSurroundings};
-use crate::problem::{Limit, Trouble, figure, quantity};
+use crate::problem::{Limit, Trouble, figure, quantity, rounded};
 
 pub(super) const SURROUNDINGS: &[&str] = &["inner", "outer"];
 pub(super) const FACE: &[&str] = &[
@@ -17,16 +17,19 @@ pub(super) const FACE: &[&str] = &[
     "radiation_to_c",
 ];
 
+/// The kinds of surroundings; a row is of one.
+pub(super) const KINDS: &[&str] = &["insulated", "held_c", "heat_flux_into_w_per_m2", "temperature_c"];
+
 /// The keys of one quantity over time: ramp, table, cycle.
-struct Keys {
-    ramp: &'static [&'static str],
-    table: &'static [&'static str],
-    cycle: &'static [&'static str],
+pub(super) struct Keys {
+    pub ramp: &'static [&'static str],
+    pub table: &'static [&'static str],
+    pub cycle: &'static [&'static str],
     value: &'static Limit,
     amplitude: &'static Limit,
 }
 
-static CELSIUS: Keys = Keys {
+pub(super) static CELSIUS: Keys = Keys {
     ramp: &["from_c", "to_c", "over_s"],
     table: &["at_s", "values_c", "repeats_every_s"],
     cycle: &["mean_c", "amplitude_k", "period_s", "highest_at_s"],
@@ -34,7 +37,7 @@ static CELSIUS: Keys = Keys {
     amplitude: &limit::AMPLITUDE,
 };
 
-static FLUX: Keys = Keys {
+pub(super) static FLUX: Keys = Keys {
     ramp: &["from_w_per_m2", "to_w_per_m2", "over_s"],
     table: &["at_s", "values_w_per_m2", "repeats_every_s"],
     cycle: &["mean_w_per_m2", "amplitude_w_per_m2", "period_s", "highest_at_s"],
@@ -92,15 +95,14 @@ fn face(at: &At<'_>) -> WrittenFace {
 
 /// Exactly one kind of surroundings, and what belongs to it.
 fn one_kind(at: &At<'_>) -> bool {
-    let kinds = ["insulated", "held_c", "heat_flux_into_w_per_m2", "temperature_c"];
-    let given: Vec<&str> = kinds.into_iter().filter(|key| at.has(key)).collect();
+    let given: Vec<&str> = KINDS.iter().copied().filter(|key| at.has(key)).collect();
     let exchange = ["film_w_per_m2_k", "emissivity", "radiation_to_c"];
     let words = match given.as_slice() {
         [] if exchange.iter().any(|key| at.has(key)) => {
             "film_w_per_m2_k or emissivity without temperature_c; say how warm the surroundings are"
                 .to_owned()
         }
-        [] => format!("nothing says what the face sees; one of {}", kinds.join(", ")),
+        [] => format!("nothing says what the face sees; one of {}", KINDS.join(", ")),
         ["temperature_c"] if !at.has("film_w_per_m2_k") && !at.has("emissivity") => {
             "temperature_c needs film_w_per_m2_k or emissivity or both; held_c holds the face itself"
                 .to_owned()
@@ -161,7 +163,7 @@ fn over_time_flux(at: &At<'_>) -> Option<OverTimeFlux> {
 /// None: it is a plain number or a spread. Some(None): it could not be read.
 fn varying(at: &At<'_>, keys: &'static Keys) -> Option<Option<Varying>> {
     let has = |keys: &[&str]| keys.iter().any(|key| at.has(key));
-    if !at.is_object() || has(&["value", "low", "high"]) {
+    if !at.is_object() || has(SPREAD) {
         return None;
     }
     Some(if has(keys.table) {
@@ -222,7 +224,7 @@ fn cycle(fields: &Fields<'_>, keys: &Keys) -> Option<Varying> {
     let highest_at =
         fields.needed(keys.cycle[3], "when it is highest").and_then(|at| at.number(&limit::WHEN));
     let (mean, amplitude, period, highest_at) = (mean?, amplitude?, period?, highest_at?);
-    let extremes = [("falls", mean - amplitude), ("rises", mean + amplitude)];
+    let extremes = [("falls", rounded(mean - amplitude)), ("rises", rounded(mean + amplitude))];
     if let Some((verb, extreme)) = extremes.into_iter().find(|(_, extreme)| !keys.value.holds(*extreme)) {
         let words = format!("it {verb} to {}; {}", quantity(extreme, keys.value.unit), keys.value);
         let at = fields.get(keys.cycle[1]).unwrap_or_else(|| fields.at().clone());
