@@ -104,6 +104,17 @@ fn what_hangs_on_an_unreadable_value_is_not_complained_about() {
 }
 
 #[test]
+fn a_layer_may_be_called_like_a_face() {
+    let condition = |of: &str| json!({ "what": "hottest", "of": of, "below_c": 50 });
+    let scenario = with(&[
+        ("/item/layers/0/name", json!("inner")),
+        ("/item/layers/2/name", json!("outer")),
+        ("/must_not", json!([condition("inner"), condition("outer"), condition("item")])),
+    ]);
+    assert!(stillheat::solve(&scenario.to_string()).is_ok());
+}
+
+#[test]
 fn very_many_problems_are_counted_and_the_first_hundred_told() {
     let mut scenario = good();
     for i in 0..5_000 {

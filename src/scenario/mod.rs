@@ -12,6 +12,7 @@ pub mod limits;
 mod nearest;
 mod read;
 mod read_faces;
+mod read_layers;
 #[cfg(not(target_arch = "wasm32"))]
 mod schema;
 mod types;

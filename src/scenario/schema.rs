@@ -105,7 +105,19 @@ fn made() -> Value {
         schema["$defs"][name]["oneOf"] = Value::Array(each);
     }
     schema["$defs"]["WrittenFace"]["properties"]["insulated"]["const"] = json!(true);
-    schema
+    in_order(schema)
+}
+
+/// What a reader looks for first stands first.
+fn in_order(schema: Value) -> Value {
+    let mut ordered = Map::new();
+    for key in ["$schema", "title", "description"] {
+        ordered.insert(key.to_owned(), schema[key].clone());
+    }
+    if let Value::Object(keywords) = schema {
+        ordered.extend(keywords);
+    }
+    Value::Object(ordered)
 }
 
 /// Forbids other keys in every object and null everywhere, and writes the limits in.

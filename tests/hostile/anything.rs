@@ -60,11 +60,11 @@ fn json_value() -> impl Strategy<Value = Value> {
     })
 }
 
-/// An example, asked for its first seconds only, so that an answer takes no time.
+/// An example, asked for its first day only, so that an answer takes little time.
 fn example() -> impl Strategy<Value = Value> {
     proptest::sample::select(examples()).prop_map(|example| {
         let mut scenario: Value = serde_json::from_str(example.text).expect("an example is JSON");
-        put(&mut scenario, "/look_ahead_s", json!(5));
+        put(&mut scenario, "/look_ahead_s", json!(1e5));
         scenario
     })
 }
@@ -94,8 +94,8 @@ fn extreme() -> impl Strategy<Value = f64> {
 fn ends_well(text: &str) -> Result<(), TestCaseError> {
     match stillheat::solve(text) {
         Ok(solved) => {
-            let report = serde_json::to_value(&solved.report).expect("a report can be written");
-            prop_assert!(report.is_object());
+            let report = format!("{:?}", solved.report);
+            prop_assert!(!report.contains("NaN") && !report.contains(": inf"), "{report}");
         }
         Err(problems) => {
             prop_assert!(!problems.is_empty());
@@ -106,7 +106,7 @@ fn ends_well(text: &str) -> Result<(), TestCaseError> {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig { cases: 4000, failure_persistence: None, ..ProptestConfig::default() })]
+    #![proptest_config(ProptestConfig { cases: 100, failure_persistence: None, ..ProptestConfig::default() })]
 
     #[test]
     fn bytes(bytes in proptest::collection::vec(any::<u8>(), 0..200)) {

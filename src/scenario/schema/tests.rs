@@ -1,4 +1,4 @@
-use super::super::{at, examples, read, read_faces};
+use super::super::{at, examples, read, read_faces, read_layers};
 use super::{ONE_OF, made};
 use crate::problem::Trouble;
 use serde_json::{Value, json};
@@ -109,9 +109,9 @@ fn the_schema_knows_exactly_the_keys_of_the_reader() {
     let read = [
         read::SCENARIO,
         read::ITEM,
-        read::LAYER,
-        read::PROPERTY_TABLE,
-        read::PROPERTY_POLYNOMIAL,
+        read_layers::LAYER,
+        read_layers::PROPERTY_TABLE,
+        read_layers::PROPERTY_POLYNOMIAL,
         read::START,
         read::PROFILE_POINT,
         read::STEADY_BEFORE,
