@@ -46,8 +46,7 @@ pub struct Solved {
 /// # Errors
 /// Everything that is wrong with the text, each problem with its place.
 pub fn solve(text: &str) -> Result<Solved, Vec<Problem>> {
-    let scenario = scenario::read(text)?;
-    let checked = Item::check(&scenario)?;
+    let (scenario, checked) = checked(text)?;
     let resolved = answer::resolve(&checked.item).map_err(|error| {
         let words = format!("the steady state of the earlier surroundings was not found ({error})");
         vec![Problem::error("/start/steady_before", Trouble::Contradiction { words })]
@@ -60,4 +59,15 @@ pub fn solve(text: &str) -> Result<Solved, Vec<Problem>> {
     let about = Circumstances { title: checked.title.clone(), clock, warnings, by_hand };
     let report = answer::report(&checked.item, &resolved, about);
     Ok(Solved { scenario, checked, resolved, report })
+}
+
+/// What is written, read and checked; all problems of both at once.
+fn checked(text: &str) -> Result<(Scenario, Checked), Vec<Problem>> {
+    let (scenario, problems) = scenario::attempt(text);
+    let Some(scenario) = scenario else { return Err(problem::together(problems, Vec::new())) };
+    match Item::check(&scenario) {
+        Ok(checked) if problems.is_empty() => Ok((scenario, checked)),
+        Ok(_) => Err(problem::together(problems, Vec::new())),
+        Err(more) => Err(problem::together(problems, more)),
+    }
 }

@@ -4,6 +4,9 @@
 
 use std::fmt;
 
+/// Problems that are told at most; the rest are counted.
+pub const TOLD: usize = 100;
+
 /// Does it stop the calculation, or stand beside the answer?
 #[derive(Clone, Copy, Debug, PartialEq, Eq, serde::Serialize)]
 #[serde(rename_all = "lowercase")]
@@ -170,12 +173,66 @@ impl Problem {
     }
 }
 
+/// The problems of the reader with those that the check found beside them. What hangs on a value that could not
+/// be read is left out: it stands at, above or below the same place, or beside a key that is not known and may
+/// be the one that is missed.
+pub fn together(read: Vec<Problem>, checked: Vec<Problem>) -> Vec<Problem> {
+    let hangs_on = |later: &Problem, first: &Problem| {
+        within(&later.path, &first.path)
+            || within(&first.path, &later.path)
+            || matches!(first.trouble, Trouble::UnknownKey { .. })
+                && parent(&first.path) == parent(&later.path)
+    };
+    let mut all = read;
+    let read = all.len();
+    for problem in checked {
+        if !all[..read].iter().any(|first| hangs_on(&problem, first)) {
+            all.push(problem);
+        }
+    }
+    if all.len() > TOLD {
+        let words = format!("{} problems more are not told; mend these first", all.len() - TOLD);
+        all.truncate(TOLD);
+        all.push(Problem::error("", Trouble::Contradiction { words }));
+    }
+    all
+}
+
+/// Is a place the other one, or in it?
+fn within(place: &str, other: &str) -> bool {
+    place.strip_prefix(other).is_some_and(|rest| rest.is_empty() || rest.starts_with('/'))
+}
+
+fn parent(place: &str) -> &str {
+    place.rsplit_once('/').map_or("", |(parent, _)| parent)
+}
+
+/// A number in a message: with an exponent where it would be a long row of digits.
+pub fn figure(x: f64) -> String {
+    if x == 0.0 || (1e-6..1e9).contains(&x.abs()) { x.to_string() } else { format!("{x:e}") }
+}
+
+/// A calculated number without the hair that binary fractions leave: 9 digits.
+pub fn rounded(x: f64) -> f64 {
+    format!("{x:.8e}").parse().unwrap_or(x)
+}
+
+/// A number in a message with its unit.
+pub fn quantity(x: f64, unit: &str) -> String {
+    if unit.is_empty() { figure(x) } else { format!("{} {unit}", figure(x)) }
+}
+
+/// Text out of a file in a message: what would steer a terminal is replaced.
+pub fn printable(text: &str) -> String {
+    text.chars().map(|letter| if letter.is_control() { '\u{fffd}' } else { letter }).collect()
+}
+
 impl fmt::Display for Limit {
-    /// "a thickness is above 0 m and at most 20 m"
+    /// "a film coefficient is above 0 W/(m² K) and at most 1000000 W/(m² K)"
     fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
         let low = if self.lowest_allowed { "at least" } else { "above" };
-        let unit = if self.unit.is_empty() { String::new() } else { format!(" {}", self.unit) };
-        write!(f, "{} is {low} {}{unit} and at most {}{unit}", self.name, self.lowest, self.highest)
+        let with_unit = |x| quantity(x, self.unit);
+        write!(f, "{} is {low} {} and at most {}", self.name, with_unit(self.lowest), with_unit(self.highest))
     }
 }
 
@@ -183,13 +240,13 @@ impl fmt::Display for Trouble {
     fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
         match self {
             Self::NotJson { line, column, detail } => {
-                write!(f, "not JSON at line {line}, column {column}: {detail}")
+                write!(f, "cannot be read as JSON at line {line}, column {column}: {detail}")
             }
             Self::WrongType { found, expected } => write!(f, "{found} found; {expected} is expected"),
             Self::UnknownKey { .. } => write!(f, "this key is not known"),
             Self::Missing { what } => write!(f, "missing; {what}"),
-            Self::Repeated { key } => write!(f, "the key \"{key}\" stands here twice"),
-            Self::OutOfRange { limit, found } => write!(f, "{found} is not allowed; {limit}"),
+            Self::Repeated { key } => write!(f, "the key \"{}\" stands here twice", printable(key)),
+            Self::OutOfRange { limit, found } => write!(f, "{} is not allowed; {limit}", figure(*found)),
             Self::NotOneOf { found, allowed, .. } => {
                 write!(f, "\"{found}\" is not known; allowed: {}", allowed.join(", "))
             }
@@ -204,9 +261,9 @@ impl fmt::Display for Trouble {
 }
 
 impl fmt::Display for Problem {
-    /// `/item/layers/2/thickness_m: -0.01 is not allowed; a thickness is above 0 m and at most 20 m`
+    /// `/probes/0/from_inside_m: -0.01 is not allowed; a distance is at least 0 m and at most 1000 m`
     fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
-        let place = if self.path.is_empty() { "the file" } else { &self.path };
+        let place = if self.path.is_empty() { "the file" } else { &printable(&self.path) };
         write!(f, "{place}: {}", self.trouble)?;
         let hint = self.hint();
         if hint.is_empty() { Ok(()) } else { write!(f, ". {hint}") }

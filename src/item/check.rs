@@ -2,10 +2,11 @@
 
 use super::check_faces::{face_programme, one_face};
 use super::check_layers::layers;
-use super::check_watch::{conditions, probes};
+use super::check_watch::{Places, conditions, probes};
 use super::{Item, Programme, Shape, Side, Start};
 use crate::matter::library::Material;
-use crate::problem::{Problem, Severity, Trouble};
+use crate::problem::{Problem, Severity, Trouble, figure, rounded};
+use crate::scenario::limits::{PLACE_STEP, apart};
 use crate::scenario::{Number, Scenario, WrittenShape, WrittenStart, WrittenSteadyBefore};
 use crate::units::clock::Clock;
 use crate::units::kelvin;
@@ -55,23 +56,22 @@ fn check(scenario: &Scenario, problems: &mut Vec<Problem>) -> Option<Checked> {
     }
     let inner = face_programme(&scenario.surroundings.inner, "/surroundings/inner", problems);
     let outer = face_programme(&scenario.surroundings.outer, "/surroundings/outer", problems);
-    let (layers, inner, outer) = (layers?, inner?, outer?);
-    let thickness: f64 = layers.all.iter().map(|layer| layer.thickness).sum();
-    let start = start(scenario, shape, thickness, layers.all.len(), problems);
+    let thickness: f64 = scenario.item.layers.iter().map(|layer| layer.thickness_m.value()).sum();
+    let start = start(scenario, shape, thickness, problems);
     let probes = probes(&scenario.probes, thickness, problems);
-    let places = super::check_watch::Places { layers: &layers.all, probes: &probes, shape };
+    let places = Places { layers: &layers.names, probes: &probes, shape };
     let ready_when = conditions(&scenario.ready_when, "/ready_when", &places, problems);
     let must_not = conditions(&scenario.must_not, "/must_not", &places, problems);
     let item = Item {
         shape,
-        inner,
-        outer,
+        inner: inner?,
+        outer: outer?,
         start: start?,
         probes,
         ready_when: ready_when?,
         must_not: must_not?,
         look_ahead: scenario.look_ahead_s.unwrap_or(LOOK_AHEAD),
-        layers: layers.all,
+        layers: layers.all?,
     };
     super::unusual::warn(&item, &layers.materials, problems);
     Some(Checked {
@@ -109,19 +109,14 @@ fn clock(scenario: &Scenario, problems: &mut Vec<Problem>) -> Option<Clock> {
     clock
 }
 
-fn start(
-    scenario: &Scenario,
-    shape: Shape,
-    thickness: f64,
-    layers: usize,
-    problems: &mut Vec<Problem>,
-) -> Option<Start> {
+fn start(scenario: &Scenario, shape: Shape, thickness: f64, problems: &mut Vec<Problem>) -> Option<Start> {
     let temperature = |number: &Number| kelvin(number.value());
     let WrittenStart { uniform_c, per_layer_c, profile, steady_before } = &scenario.start;
     if let Some(uniform) = uniform_c {
         return Some(Start::Uniform(temperature(uniform)));
     }
     if let Some(all) = per_layer_c {
+        let layers = scenario.item.layers.len();
         if all.len() != layers {
             let words = format!("{} temperatures for {layers} layers; each layer needs its own", all.len());
             problems.push(Problem::error("/start/per_layer_c", Trouble::Contradiction { words }));
@@ -133,10 +128,12 @@ fn start(
         let mut sound = true;
         for (i, point) in points.iter().enumerate() {
             let path = format!("/start/profile/{i}/from_inside_m");
+            let at = figure(point.from_inside_m);
             let words = if point.from_inside_m > thickness * (1.0 + 1e-9) {
-                format!("{} m is outside the item, which is {thickness} m thick", point.from_inside_m)
-            } else if i > 0 && point.from_inside_m <= points[i - 1].from_inside_m {
-                format!("{} m does not come after {} m", point.from_inside_m, points[i - 1].from_inside_m)
+                format!("{at} m is outside the item, which is {} m thick", rounded(thickness))
+            } else if i > 0 && !apart(points[i - 1].from_inside_m, point.from_inside_m, PLACE_STEP) {
+                let before = figure(points[i - 1].from_inside_m);
+                format!("{at} m does not come after {before} m by at least {PLACE_STEP} m")
             } else {
                 continue;
             };

@@ -1,7 +1,8 @@
 //! What the faces see: rows in order, every quantity over time in SI.
 
 use super::{Face, OverTime, Programme};
-use crate::problem::{Problem, Trouble};
+use crate::problem::{Problem, Trouble, figure};
+use crate::scenario::limits::{TIME_STEP, apart};
 use crate::scenario::{Number, OverTimeC, OverTimeFlux, WrittenFace};
 use crate::units::kelvin;
 
@@ -14,15 +15,16 @@ pub(super) fn face_programme(
     if rows.is_empty() {
         return Some(Programme::insulated());
     }
-    let mut programme = Programme { rows: Vec::new() };
+    let mut all = Vec::new();
     let mut before = None;
     for (number, row) in rows.iter().enumerate() {
         let from = begins(row, number, before, path, problems);
-        let face = one_face(row, from, &format!("{path}/{number}"), problems)?;
-        programme.rows.push((from, face));
+        let face = one_face(row, from, &format!("{path}/{number}"), problems);
+        all.push(face.map(|face| (from, face)));
         before = Some(from);
     }
-    Some(programme)
+    let rows: Option<Vec<(f64, Face)>> = all.into_iter().collect();
+    rows.map(|rows| Programme { rows })
 }
 
 /// When a row begins, s; written down as a problem where it does not follow the row before.
@@ -36,14 +38,17 @@ fn begins(
     let place = format!("{path}/{number}/from_s");
     match (row.from_s, before) {
         (Some(from), None) if from > 0.0 => {
-            let words = format!("the first row begins at {from} s; it must begin at 0");
+            let words = format!("the first row begins at {} s; it must begin at 0", figure(from));
             problems.push(Problem::error(place, Trouble::Contradiction { words }));
             0.0
         }
         (_, None) => 0.0,
         (Some(from), Some(before)) => {
-            if from <= before {
-                let words = format!("{from} s does not come after {before} s, where the row before begins");
+            if !apart(before, from, TIME_STEP) {
+                let [from, before] = [from, before].map(figure);
+                let words = format!(
+                    "{from} s does not come after {before} s, where the row before begins, by at least {TIME_STEP} s"
+                );
                 problems.push(Problem::error(place, Trouble::Contradiction { words }));
             }
             from

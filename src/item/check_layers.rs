@@ -1,10 +1,11 @@
 //! Layers: materials, properties, motion, contact.
 
+use super::check_watch::WHOLE;
 use super::{Layer, Motion};
 use crate::matter::Law;
 use crate::matter::library::{self, Material, Phase};
-use crate::problem::{Problem, Trouble};
-use crate::scenario::{WrittenLayer, WrittenMotion, WrittenProperty, nearest};
+use crate::problem::{Limit, Problem, Trouble, quantity, rounded};
+use crate::scenario::{WrittenLayer, WrittenMotion, WrittenProperty, limits, nearest};
 use crate::units::kelvin;
 
 /// A still liquid thinner than this hardly moves, m. Common practice, no source.
@@ -12,31 +13,49 @@ const THIN_LIQUID: f64 = 0.005;
 
 /// The layers with what is known of their materials.
 pub(super) struct Layers {
-    pub all: Vec<Layer>,
+    /// None where one cannot be made.
+    pub all: Option<Vec<Layer>>,
+    /// What each is called.
+    pub names: Vec<String>,
     /// The library material of each layer, if one.
     pub materials: Vec<Option<Material>>,
     pub still_liquids: Vec<(usize, Material)>,
 }
 
-pub(super) fn layers(written: &[WrittenLayer], problems: &mut Vec<Problem>) -> Option<Layers> {
-    let mut found = Layers { all: Vec::new(), materials: Vec::new(), still_liquids: Vec::new() };
-    let mut sound = true;
+pub(super) fn layers(written: &[WrittenLayer], problems: &mut Vec<Problem>) -> Layers {
+    let mut all = Vec::new();
+    let (mut names, mut materials, mut still_liquids) = (Vec::new(), Vec::new(), Vec::new());
     for (number, layer) in written.iter().enumerate() {
         let path = format!("/item/layers/{number}");
         let material = material(layer, &path, problems);
-        let made = one(layer, number, material.as_ref(), &path, problems);
-        sound &= made.is_some() && (layer.material.is_none() || material.is_some());
+        let name = name(layer, number, material.as_ref(), &path, problems);
+        let made = one(layer, number, &name, material.as_ref(), &path, problems);
         if let (Some(made), Some(material)) = (&made, &material)
             && material.phase == Phase::Liquid
             && made.motion == Motion::Still
             && made.thickness > THIN_LIQUID
         {
-            found.still_liquids.push((number, material.clone()));
+            still_liquids.push((number, material.clone()));
         }
-        found.all.extend(made);
-        found.materials.push(material);
+        all.push(made.filter(|_| layer.material.is_none() || material.is_some()));
+        names.push(name);
+        materials.push(material);
     }
-    sound.then_some(found)
+    Layers { all: all.into_iter().collect(), names, materials, still_liquids }
+}
+
+fn name(
+    written: &WrittenLayer,
+    number: usize,
+    material: Option<&Material>,
+    path: &str,
+    problems: &mut Vec<Problem>,
+) -> String {
+    if written.name.as_deref() == Some(WHOLE) {
+        let words = format!("\"{WHOLE}\" means all layers together; give the layer another name");
+        problems.push(Problem::error(format!("{path}/name"), Trouble::Contradiction { words }));
+    }
+    layer_name(written.name.as_deref(), material.map(|material| material.name), number)
 }
 
 fn material(layer: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Option<Material> {
@@ -56,25 +75,46 @@ fn material(layer: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Op
 fn one(
     written: &WrittenLayer,
     number: usize,
+    name: &str,
     material: Option<&Material>,
     path: &str,
     problems: &mut Vec<Problem>,
 ) -> Option<Layer> {
-    let mut property = |given: Option<&WrittenProperty>, key: &str, from: fn(&Material) -> &Law| {
-        property(given, material.map(from), written.material.is_some(), &format!("{path}/{key}"), problems)
+    let named = written.material.is_some();
+    let mut property = |given: Option<&WrittenProperty>, key: &str, from: Option<&Law>, limit| match given {
+        Some(given) => own(given, limit, &format!("{path}/{key}"), problems),
+        None if from.is_none() && !named => {
+            let what = "a layer without a material needs density, heat capacity and conductivity".to_owned();
+            problems.push(Problem::error(format!("{path}/{key}"), Trouble::Missing { what }));
+            None
+        }
+        None => from.cloned(),
     };
-    let density = property(written.density_kg_per_m3.as_ref(), "density_kg_per_m3", |m| &m.density);
-    let heat_capacity =
-        property(written.heat_capacity_j_per_kg_k.as_ref(), "heat_capacity_j_per_kg_k", |m| &m.heat_capacity);
-    let conductivity =
-        property(written.conductivity_w_per_m_k.as_ref(), "conductivity_w_per_m_k", |m| &m.conductivity);
+    let density = property(
+        written.density_kg_per_m3.as_ref(),
+        "density_kg_per_m3",
+        material.map(|material| &material.density),
+        &limits::DENSITY,
+    );
+    let heat_capacity = property(
+        written.heat_capacity_j_per_kg_k.as_ref(),
+        "heat_capacity_j_per_kg_k",
+        material.map(|material| &material.heat_capacity),
+        &limits::HEAT_CAPACITY,
+    );
+    let conductivity = property(
+        written.conductivity_w_per_m_k.as_ref(),
+        "conductivity_w_per_m_k",
+        material.map(|material| &material.conductivity),
+        &limits::CONDUCTIVITY,
+    );
     let motion = motion(written, path, problems);
     if number == 0 && written.contact_m2_k_per_w.is_some() {
         let words = "the innermost layer has nothing inside it to be in contact with".to_owned();
         problems.push(Problem::error(format!("{path}/contact_m2_k_per_w"), Trouble::Contradiction { words }));
     }
     Some(Layer {
-        name: layer_name(written.name.as_deref(), material.map(|material| material.name), number),
+        name: name.to_owned(),
         thickness: written.thickness_m.value(),
         capacity: density?.times(&heat_capacity?),
         conductivity: conductivity?,
@@ -112,26 +152,18 @@ fn motion(written: &WrittenLayer, path: &str, problems: &mut Vec<Problem>) -> Op
     None
 }
 
-/// The written property, else the material's.
-fn property(
-    written: Option<&WrittenProperty>,
-    material: Option<&Law>,
-    material_is_named: bool,
-    path: &str,
-    problems: &mut Vec<Problem>,
-) -> Option<Law> {
-    let Some(written) = written else {
-        if material.is_none() && !material_is_named {
-            let what = "a layer without a material needs density, heat capacity and conductivity".to_owned();
-            problems.push(Problem::error(path, Trouble::Missing { what }));
-        }
-        return material.cloned();
-    };
+/// The written property; wherever it goes, it stays within its limits.
+fn own(written: &WrittenProperty, limit: &Limit, path: &str, problems: &mut Vec<Problem>) -> Option<Law> {
     let law = law(written);
-    if law.lowest() > 0.0 {
+    let (lowest, highest) = law.extent();
+    let [lowest, highest] = [lowest, highest].map(rounded);
+    let words = if !limit.holds(lowest) {
+        format!("it falls to {} within its range; {limit}", quantity(lowest, limit.unit))
+    } else if !limit.holds(highest) {
+        format!("it rises to {} within its range; {limit}", quantity(highest, limit.unit))
+    } else {
         return Some(law);
-    }
-    let words = format!("it falls to {} within its range; a property stays above 0", law.lowest());
+    };
     problems.push(Problem::error(path, Trouble::Contradiction { words }));
     None
 }

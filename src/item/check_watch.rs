@@ -1,17 +1,18 @@
 //! Probes and conditions: what is watched, and where.
 
-use super::{Condition, Layer, Probe, Region, Sense, Shape, Side, Watch};
-use crate::problem::{Problem, Trouble};
+use super::{Condition, Probe, Region, Sense, Shape, Side, Watch};
+use crate::problem::{Problem, Trouble, figure, rounded};
 use crate::scenario::{Number, WrittenCondition, WrittenProbe, WrittenWhat, nearest};
 use crate::units::kelvin;
 
 const SECONDS_PER_HOUR: f64 = 3_600.0;
 /// The word for all layers together.
-const WHOLE: &str = "item";
+pub(super) const WHOLE: &str = "item";
 
 /// What conditions may refer to.
 pub(super) struct Places<'a> {
-    pub layers: &'a [Layer],
+    /// Names of the layers, in order.
+    pub layers: &'a [String],
     pub probes: &'a [Probe],
     pub shape: Shape,
 }
@@ -25,15 +26,16 @@ pub(super) fn probes(written: &[WrittenProbe], thickness: f64, problems: &mut Ve
             (None, outside) => ("from_outside_m", outside.unwrap_or(0.0)),
         };
         if distance > thickness * (1.0 + 1e-9) {
+            let (distance, thickness) = (figure(distance), rounded(thickness));
             let words = format!("{distance} m is outside the item, which is {thickness} m thick");
             problems.push(Problem::error(format!("{path}/{key}"), Trouble::Contradiction { words }));
         }
-        if all.iter().any(|other| other.name == probe.name) {
+        if !probe.name.is_empty() && all.iter().any(|other| other.name == probe.name) {
             let words = format!("two probes are called \"{}\"", probe.name);
             problems.push(Problem::error(format!("{path}/name"), Trouble::Contradiction { words }));
         }
         let from_inside = if key == "from_inside_m" { distance } else { thickness - distance };
-        all.push(Probe { name: probe.name.clone(), from_inside: from_inside.clamp(0.0, thickness) });
+        all.push(Probe { name: probe.name.clone(), from_inside: from_inside.max(0.0).min(thickness) });
     }
     all
 }
@@ -140,16 +142,16 @@ fn region(
     let Some(of) = of.filter(|of| *of != WHOLE) else {
         return Some((Region::Whole, "the whole item".to_owned()));
     };
-    let mut named = places.layers.iter().enumerate().filter(|(_, layer)| layer.name == of);
+    let mut named = places.layers.iter().enumerate().filter(|(_, name)| *name == of);
     match (named.next(), named.next()) {
-        (Some((number, layer)), None) => Some((Region::Layer(number), layer.name.clone())),
+        (Some((number, name)), None) => Some((Region::Layer(number), name.clone())),
         (Some(_), Some(_)) => {
             let words = format!("two layers are called \"{of}\"; give them different names");
             problems.push(Problem::error(path, Trouble::Contradiction { words }));
             None
         }
         (None, _) => {
-            let names = places.layers.iter().map(|layer| layer.name.as_str()).chain([WHOLE]);
+            let names = places.layers.iter().map(String::as_str).chain([WHOLE]);
             problems.push(Problem::error(path, unknown(of, names.collect())));
             None
         }
@@ -165,6 +167,10 @@ fn probe(
     let found = places.probes.iter().find(|probe| Some(probe.name.as_str()) == of);
     if found.is_none() {
         let names: Vec<&str> = places.probes.iter().map(|probe| probe.name.as_str()).collect();
+        // The one that is meant may be the one whose name could not be read.
+        if names.contains(&"") {
+            return None;
+        }
         let trouble = match of {
             _ if names.is_empty() => {
                 Trouble::Missing { what: "no probe exists; add one to /probes".to_owned() }

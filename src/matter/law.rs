@@ -88,11 +88,11 @@ impl Law {
         }
     }
 
-    /// Lowest value anywhere: exact for tables, sampled finely for higher polynomials.
-    pub fn lowest(&self) -> f64 {
+    /// Lowest and highest value anywhere.
+    pub fn extent(&self) -> (f64, f64) {
         match self {
-            Self::Constant(value) => *value,
-            Self::Pieces(pieces) => pieces.lowest(),
+            Self::Constant(value) => (*value, *value),
+            Self::Pieces(pieces) => pieces.extent(),
         }
     }
 }
@@ -169,22 +169,58 @@ impl Pieces {
         shifted(&self.coefficients[i], origin - self.knots[i])
     }
 
-    fn lowest(&self) -> f64 {
-        let mut low = self.last;
+    fn extent(&self) -> (f64, f64) {
+        let (mut low, mut high) = (self.last, self.last);
         for (pair, piece) in self.knots.windows(2).zip(&self.coefficients) {
-            let samples = if piece.len() <= 2 { 1 } else { 64 };
-            for i in 0..=samples {
-                let x = (pair[1] - pair[0]) * f64::from(i) / f64::from(samples);
-                low = low.min(polynomial(piece, x));
+            let width = pair[1] - pair[0];
+            let turns = roots(&derivative(piece), width);
+            for x in [0.0, width].into_iter().chain(turns) {
+                let value = polynomial(piece, x);
+                (low, high) = (low.min(value), high.max(value));
             }
         }
-        low
+        (low, high)
     }
 }
 
 /// Value of a polynomial, coefficients from the constant up.
 fn polynomial(coefficients: &[f64], x: f64) -> f64 {
     coefficients.iter().rev().fold(0.0, |sum, c| sum * x + c)
+}
+
+/// Its derivative.
+fn derivative(coefficients: &[f64]) -> Vec<f64> {
+    coefficients.iter().enumerate().skip(1).map(|(i, c)| c * i as f64).collect()
+}
+
+/// Where it changes its sign between 0 and `width`: once at most between two roots of its derivative.
+fn roots(coefficients: &[f64], width: f64) -> Vec<f64> {
+    /// Halvings of a bracket down to the last bit.
+    const HALVINGS: usize = 60;
+    if coefficients.len() < 2 {
+        return Vec::new();
+    }
+    let mut marks = vec![0.0];
+    marks.extend(roots(&derivative(coefficients), width));
+    marks.push(width);
+    let mut found = Vec::new();
+    for pair in marks.windows(2) {
+        let (mut left, mut right) = (pair[0], pair[1]);
+        let rises = polynomial(coefficients, left) < 0.0;
+        if rises == (polynomial(coefficients, right) < 0.0) {
+            continue;
+        }
+        for _ in 0..HALVINGS {
+            let middle = 0.5 * (left + right);
+            if rises == (polynomial(coefficients, middle) < 0.0) {
+                left = middle;
+            } else {
+                right = middle;
+            }
+        }
+        found.push(left);
+    }
+    found
 }
 
 /// Its integral from 0 to x.
@@ -252,5 +288,20 @@ mod tests {
         }
         // Midpoint rule: error of the size width² times second derivative, 1e-8 relative.
         assert_relative_eq!(both.integral(550.0) - both.integral(250.0), sum, max_relative = 1e-7);
+    }
+
+    #[test]
+    fn the_extent_finds_a_notch_of_any_width() {
+        // (T - 0.3)² (T - 0.7)² - 1e-9: below 0 in two notches of 1.6e-4 K only.
+        let squares = [0.0441, -0.42, 1.42, -2.0, 1.0];
+        let law = Law::polynomial(
+            0.0,
+            1.0,
+            std::iter::once(squares[0] - 1e-9).chain(squares[1..].to_vec()).collect(),
+        );
+        let (low, high) = law.extent();
+        assert_relative_eq!(low, -1e-9, max_relative = 1e-6);
+        assert_relative_eq!(high, 0.0441 - 1e-9, max_relative = 1e-12);
+        assert_eq!(Law::table(&[(0.0, 2.0), (1.0, 5.0), (2.0, 1.0)]).extent(), (1.0, 5.0));
     }
 }

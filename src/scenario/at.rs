@@ -1,11 +1,15 @@
 //! A place in the file while it is being read; every problem is written down and reading goes on.
 
 use super::json::pointer_part;
+use super::limits::apart;
 use super::nearest::nearest;
 use super::types::Number;
-use crate::problem::{Limit, Problem, Trouble};
+use crate::problem::{Limit, Problem, Trouble, figure, printable};
 use serde_json::{Map, Value};
 use std::cell::RefCell;
+
+/// The keys of a number that is known roughly.
+pub const SPREAD: &[&str] = &["value", "low", "high"];
 
 /// A value and where it stands.
 #[derive(Clone)]
@@ -113,17 +117,18 @@ impl<'a> At<'a> {
         all.into_iter().collect()
     }
 
-    /// A list of numbers, each above the one before.
+    /// A list of two numbers or more, each above the one before by a step at least.
     pub fn ascending(
         &self,
         what: &'static str,
-        least: usize,
         most: usize,
         limit: &'static Limit,
+        step: f64,
     ) -> Option<Vec<f64>> {
-        let all = self.numbers(what, least, most, limit)?;
-        if let Some(i) = all.windows(2).position(|pair| pair[0] >= pair[1]) {
-            let words = format!("{} comes after {}; {what} must ascend", all[i + 1], all[i]);
+        let all = self.numbers(what, 2, most, limit)?;
+        if let Some(i) = all.windows(2).position(|pair| !apart(pair[0], pair[1], step)) {
+            let (before, after) = (figure(all[i]), figure(all[i + 1]));
+            let words = format!("{after} comes after {before}; {what} must ascend by at least {step}");
             self.inner(self.value, &(i + 1).to_string()).problem(Trouble::Contradiction { words });
             return None;
         }
@@ -135,19 +140,41 @@ impl<'a> At<'a> {
         if !self.is_object() {
             return self.number(limit).map(Number::Plain);
         }
-        let fields = self.fields("a number", &["value", "low", "high"])?;
+        let fields = self.fields("a number", SPREAD)?;
         let part = |key, what| fields.needed(key, what).and_then(|at| at.number(limit));
         let value = part("value", "the likely value");
         let low = part("low", "hardly lower than this");
         let high = part("high", "hardly higher than this");
         let (value, low, high) = (value?, low?, high?);
         if !(low <= value && value <= high) {
+            let [low, value, high] = [low, value, high].map(figure);
             let words =
                 format!("low {low}, value {value}, high {high}: the value must lie between low and high");
             self.problem(Trouble::Contradiction { words });
             return None;
         }
         Some(Number::Spread { value, low, high })
+    }
+
+    /// Text in one line of so many letters at most.
+    pub fn line(&self, most: usize) -> Option<String> {
+        let text = self.text(most)?;
+        if text.chars().any(char::is_control) {
+            let words = format!("\"{}\" has control characters in it; letters only", shortened(&text));
+            self.problem(Trouble::Contradiction { words });
+            return None;
+        }
+        Some(text)
+    }
+
+    /// The same, and not empty.
+    pub fn name(&self, most: usize) -> Option<String> {
+        let name = self.line(most)?;
+        if name.trim().is_empty() {
+            self.problem(Trouble::Missing { what: "a name that conditions can refer to".to_owned() });
+            return None;
+        }
+        Some(name)
     }
 
     /// Text of so many letters at most.
@@ -182,9 +209,9 @@ impl<'a> At<'a> {
         }
     }
 
-    /// A whole number.
+    /// A whole number from 0 up.
     pub fn whole(&self) -> Option<u64> {
-        self.value.as_u64().or_else(|| self.wrong("a whole number"))
+        self.value.as_u64().or_else(|| self.wrong("a whole number from 1 up"))
     }
 }
 
@@ -224,7 +251,7 @@ fn shown(value: &Value) -> String {
 fn shortened(text: &str) -> String {
     const MOST: usize = 40;
     if text.chars().count() <= MOST {
-        return text.to_owned();
+        return printable(text);
     }
-    text.chars().take(MOST).chain(['…']).collect()
+    printable(text).chars().take(MOST).chain(['…']).collect()
 }

@@ -16,7 +16,7 @@ macro_rules! limits {
 
 limits! {
     /// Thickness of a layer. A film of paint is 20 µm, a silo has a radius of some metres.
-    THICKNESS: "a thickness", "m", 0.0, above, 50.0, "For no layer, remove it.";
+    THICKNESS: "a thickness", "m", 1e-6, from, 50.0, "For no layer, remove it.";
     /// Radius of the hollow inside.
     INNER_RADIUS: "an inner radius", "m", 0.0, from, 50.0, "";
     /// Density: gases to heavy metals.
@@ -57,6 +57,18 @@ limits! {
     DISTANCE: "a distance", "m", 0.0, from, 1_000.0, "";
     /// A coefficient of a polynomial: its values are checked, not it.
     COEFFICIENT: "a coefficient", "", -1e12, from, 1e12, "";
+}
+
+/// Points of a property table and the ends of its range are apart by this at least, K.
+pub const TEMPERATURE_STEP: f64 = 1e-3;
+/// Rows of a programme and points of a table over time are apart by this at least, s.
+pub const TIME_STEP: f64 = 1e-3;
+/// Points of a start profile are apart by this at least, m.
+pub const PLACE_STEP: f64 = 1e-6;
+
+/// Is the second at least a step above the first? A hair less passes: written decimals are rounded.
+pub fn apart(first: f64, second: f64, step: f64) -> bool {
+    second - first >= 0.99 * step
 }
 
 /// Bytes of a file at most.

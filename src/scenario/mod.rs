@@ -12,13 +12,14 @@ pub mod limits;
 mod nearest;
 mod read;
 mod read_faces;
+mod read_layers;
 #[cfg(not(target_arch = "wasm32"))]
 mod schema;
 mod types;
 
 pub use examples::{Example, examples};
 pub use nearest::nearest;
-pub use read::read;
+pub use read::{attempt, read};
 #[cfg(not(target_arch = "wasm32"))]
 pub use schema::schema;
 pub use types::*;

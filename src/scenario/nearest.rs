@@ -1,13 +1,16 @@
 //! The known word nearest to one that is not known.
 
-/// The nearest of the known words, if one is near: at most a third of its letters differ.
+/// The nearest of the known words, if one is near: at most a third of its letters differ, or it begins so.
 pub fn nearest<'a>(found: &str, known: impl IntoIterator<Item = &'a str>) -> Option<&'a str> {
     let found = found.to_lowercase();
-    let distances = known.into_iter().map(|word| (distance(&found, &word.to_lowercase()), word));
+    let known: Vec<&str> = known.into_iter().collect();
+    let distances = known.iter().map(|word| (distance(&found, &word.to_lowercase()), *word));
     let (distance, word) = distances.min_by_key(|pair| pair.0)?;
-    let near = distance <= word.chars().count() / 3 + 1;
+    if distance <= word.chars().count() / 3 + 1 {
+        return Some(word);
+    }
     // A beginning says enough: "film" for "film_w_per_m2_k".
-    (near || (found.chars().count() >= 3 && word.starts_with(&found))).then_some(word)
+    known.into_iter().find(|word| found.chars().count() >= 3 && word.starts_with(&found))
 }
 
 /// Letters to insert, remove or replace (Levenshtein 1966); long words are compared by their beginning.
@@ -36,6 +39,7 @@ mod tests {
         assert_eq!(nearest("thicknes_m", known), Some("thickness_m"));
         assert_eq!(nearest("thickness", known), Some("thickness_m"));
         assert_eq!(nearest("Material", known), Some("material"));
+        assert_eq!(nearest("mat", known), Some("material"));
         assert_eq!(nearest("colour", known), None);
     }
 }

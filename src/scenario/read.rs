@@ -3,11 +3,11 @@
 use super::at::At;
 use super::limits as limit;
 use super::types::{
-    Number, Scenario, VERSION, WrittenCondition, WrittenItem, WrittenLayer, WrittenMotion, WrittenProbe,
-    WrittenProfilePoint, WrittenProperty, WrittenShape, WrittenStart, WrittenSteadyBefore, WrittenWhat,
+    Scenario, VERSION, WrittenCondition, WrittenItem, WrittenProbe, WrittenProfilePoint, WrittenShape,
+    WrittenStart, WrittenSteadyBefore, WrittenWhat,
 };
-use super::{json, read_faces};
-use crate::problem::{Limit, Problem, Trouble};
+use super::{json, read_faces, read_layers};
+use crate::problem::{Problem, Trouble, together};
 use std::cell::RefCell;
 
 pub(super) const SCENARIO: &[&str] = &[
@@ -24,38 +24,34 @@ pub(super) const SCENARIO: &[&str] = &[
     "must_not",
 ];
 pub(super) const ITEM: &[&str] = &["shape", "inner_radius_m", "layers"];
-pub(super) const LAYER: &[&str] = &[
-    "name",
-    "material",
-    "thickness_m",
-    "density_kg_per_m3",
-    "heat_capacity_j_per_kg_k",
-    "conductivity_w_per_m_k",
-    "motion",
-    "inside_film_w_per_m2_k",
-    "contact_m2_k_per_w",
-];
-pub(super) const PROPERTY_TABLE: &[&str] = &["at_c", "values"];
-pub(super) const PROPERTY_POLYNOMIAL: &[&str] = &["polynomial_in_c", "from_c", "to_c"];
 pub(super) const START: &[&str] = &["uniform_c", "per_layer_c", "profile", "steady_before"];
 pub(super) const PROFILE_POINT: &[&str] = &["from_inside_m", "temperature_c"];
 pub(super) const STEADY_BEFORE: &[&str] = &["contents_c", "inner", "outer"];
 pub(super) const PROBE: &[&str] = &["name", "from_inside_m", "from_outside_m"];
 pub(super) const CONDITION: &[&str] = &["what", "of", "below_c", "above_c", "below_k", "below_k_per_h"];
+pub(super) const CONDITION_LIMITS: &[&str] = &["below_c", "above_c", "below_k", "below_k_per_h"];
 
 /// Reads a scenario.
 ///
 /// # Errors
 /// Everything that is wrong with the text, each with its place; one problem may hide another inside it.
 pub fn read(text: &str) -> Result<Scenario, Vec<Problem>> {
-    let value = json::parse(text)?;
-    let problems = RefCell::new(Vec::new());
-    let scenario = scenario(&At::top(&value, &problems));
-    let problems = problems.into_inner();
-    match scenario {
-        Some(scenario) if problems.is_empty() => Ok(scenario),
-        _ => Err(problems),
+    match attempt(text) {
+        (Some(scenario), problems) if problems.is_empty() => Ok(scenario),
+        (_, problems) => Err(together(problems, Vec::new())),
     }
+}
+
+/// What can be read, and what is wrong with it. Where something is, the scenario is good for finding what else
+/// is wrong and for nothing more: what could not be read is left out, and a layer of unknown thickness has no end.
+pub fn attempt(text: &str) -> (Option<Scenario>, Vec<Problem>) {
+    let (value, repeated) = match json::parse(text) {
+        Ok(read) => read,
+        Err(problem) => return (None, vec![problem]),
+    };
+    let problems = RefCell::new(repeated);
+    let scenario = scenario(&At::top(&value, &problems));
+    (scenario, problems.into_inner())
 }
 
 fn scenario(at: &At<'_>) -> Option<Scenario> {
@@ -68,30 +64,19 @@ fn scenario(at: &At<'_>) -> Option<Scenario> {
     let start = fields.needed("start", "the temperatures at time zero").and_then(|at| start(&at));
     let surroundings =
         fields.needed("surroundings", "what the faces see").and_then(|at| read_faces::surroundings(&at));
-    let conditions = |key, what| match fields.get(key) {
-        Some(at) => all(at.list(what, 0, limit::CONDITIONS)?.iter().map(condition).collect()),
-        None => Some(Vec::new()),
-    };
-    let ready_when = conditions("ready_when", "conditions");
-    let must_not = conditions("must_not", "limits");
-    let probes = match fields.get("probes") {
-        Some(at) => {
-            at.list("probes", 0, limit::PROBES).and_then(|list| all(list.iter().map(probe).collect()))
-        }
-        None => Some(Vec::new()),
-    };
+    let list = |key, what, most| fields.get(key).and_then(|at| at.list(what, 0, most)).unwrap_or_default();
     Some(Scenario {
         stillheat: VERSION,
-        title: fields.get("title").and_then(|at| at.text(limit::TITLE_LETTERS)),
+        title: fields.get("title").and_then(|at| at.line(limit::TITLE_LETTERS)),
         notes: fields.get("notes").and_then(|at| at.text(limit::NOTES_LETTERS)),
-        stopped_at: fields.get("stopped_at").and_then(|at| at.text(limit::NAME_LETTERS)),
+        stopped_at: fields.get("stopped_at").and_then(|at| at.line(limit::NAME_LETTERS)),
         look_ahead_s: fields.get("look_ahead_s").and_then(|at| at.number(&limit::LOOK_AHEAD)),
+        start: start.unwrap_or_default(),
+        surroundings: surroundings.unwrap_or_default(),
+        probes: fields.get("probes").map(|at| probes(&at)).unwrap_or_default(),
+        ready_when: list("ready_when", "conditions", limit::CONDITIONS).iter().map(condition).collect(),
+        must_not: list("must_not", "limits", limit::CONDITIONS).iter().map(condition).collect(),
         item: item?,
-        start: start?,
-        surroundings: surroundings?,
-        probes: probes?,
-        ready_when: ready_when?,
-        must_not: must_not?,
     })
 }
 
@@ -132,67 +117,11 @@ fn item(at: &At<'_>) -> Option<WrittenItem> {
     let layers = fields
         .needed("layers", "the layers from the inside out")
         .and_then(|at| at.list("layers", 1, limit::LAYERS))
-        .and_then(|list| all(list.iter().map(layer).collect()));
-    let inner_radius_m = fields.get("inner_radius_m").and_then(|at| at.number(&limit::INNER_RADIUS));
+        .map(|list| list.iter().map(read_layers::layer).collect());
+    // One that cannot be read still says that there is a hollow inside.
+    let inner_radius_m =
+        fields.get("inner_radius_m").map(|at| at.number(&limit::INNER_RADIUS).unwrap_or(f64::INFINITY));
     Some(WrittenItem { shape: shape?, inner_radius_m, layers: layers? })
-}
-
-fn layer(at: &At<'_>) -> Option<WrittenLayer> {
-    let fields = at.fields("an object that describes a layer", LAYER)?;
-    let motions = [
-        ("still", WrittenMotion::Still),
-        ("self-mixing", WrittenMotion::SelfMixing),
-        ("stirred", WrittenMotion::Stirred),
-    ];
-    let thickness =
-        fields.needed("thickness_m", "how thick the layer is").and_then(|at| at.spread(&limit::THICKNESS));
-    let property = |key, limit: &'static Limit| fields.get(key).and_then(|at| property(&at, limit));
-    let layer = WrittenLayer {
-        name: fields.get("name").and_then(|at| at.text(limit::NAME_LETTERS)),
-        material: fields.get("material").and_then(|at| at.text(limit::NAME_LETTERS)),
-        thickness_m: Number::Plain(0.0),
-        density_kg_per_m3: property("density_kg_per_m3", &limit::DENSITY),
-        heat_capacity_j_per_kg_k: property("heat_capacity_j_per_kg_k", &limit::HEAT_CAPACITY),
-        conductivity_w_per_m_k: property("conductivity_w_per_m_k", &limit::CONDUCTIVITY),
-        motion: fields.get("motion").and_then(|at| at.word(&motions)),
-        inside_film_w_per_m2_k: fields.get("inside_film_w_per_m2_k").and_then(|at| at.spread(&limit::FILM)),
-        contact_m2_k_per_w: fields.get("contact_m2_k_per_w").and_then(|at| at.spread(&limit::CONTACT)),
-    };
-    Some(WrittenLayer { thickness_m: thickness?, ..layer })
-}
-
-fn property(at: &At<'_>, limits: &'static Limit) -> Option<WrittenProperty> {
-    if at.has("at_c") || at.has("values") {
-        let fields = at.fields("a table", PROPERTY_TABLE)?;
-        let at_c = fields
-            .needed("at_c", "the temperatures of the table")
-            .and_then(|at| at.ascending("temperatures", 2, limit::PROPERTY_POINTS, &limit::TEMPERATURE));
-        let values = fields
-            .needed("values", "a value for each temperature")
-            .and_then(|at| at.numbers("values", 2, limit::PROPERTY_POINTS, limits));
-        let (at_c, values) = (at_c?, values?);
-        return at
-            .same_length("at_c", at_c.len(), "values", values.len())
-            .then_some(WrittenProperty::Table { at_c, values });
-    }
-    if at.has("polynomial_in_c") || at.has("from_c") || at.has("to_c") {
-        let fields = at.fields("a polynomial", PROPERTY_POLYNOMIAL)?;
-        let polynomial_in_c = fields
-            .needed("polynomial_in_c", "the coefficients from the constant up")
-            .and_then(|at| at.numbers("coefficients", 1, limit::COEFFICIENTS, &limit::COEFFICIENT));
-        let from_c =
-            fields.needed("from_c", "where its range begins").and_then(|at| at.number(&limit::TEMPERATURE));
-        let to_c =
-            fields.needed("to_c", "where its range ends").and_then(|at| at.number(&limit::TEMPERATURE));
-        let (polynomial_in_c, from_c, to_c) = (polynomial_in_c?, from_c?, to_c?);
-        if from_c >= to_c {
-            let words = format!("from_c {from_c} is not below to_c {to_c}");
-            at.problem(Trouble::Contradiction { words });
-            return None;
-        }
-        return Some(WrittenProperty::Polynomial { polynomial_in_c, from_c, to_c });
-    }
-    at.spread(limits).map(WrittenProperty::Number)
 }
 
 fn start(at: &At<'_>) -> Option<WrittenStart> {
@@ -238,31 +167,50 @@ fn profile_point(at: &At<'_>) -> Option<WrittenProfilePoint> {
 fn steady_before(at: &At<'_>) -> Option<WrittenSteadyBefore> {
     let fields = at.fields("the earlier surroundings", STEADY_BEFORE)?;
     let contents_c = fields.get("contents_c").and_then(|at| at.spread(&limit::TEMPERATURE));
-    let inner = fields.get("inner").and_then(|at| read_faces::face(&at));
-    let outer = fields.needed("outer", "what the outer face saw").and_then(|at| read_faces::face(&at));
+    let inner = fields.get("inner").map(|at| read_faces::earlier_face(&at));
+    let outer = fields.needed("outer", "what the outer face saw").map(|at| read_faces::earlier_face(&at));
     if at.has("contents_c") && at.has("inner") {
         let words =
             "contents_c and inner are both given; what keeps the contents hot can be only one".to_owned();
         at.problem(Trouble::Contradiction { words });
     }
-    Some(WrittenSteadyBefore { contents_c, inner, outer: outer? })
+    Some(WrittenSteadyBefore { contents_c, inner, outer: outer.unwrap_or_default() })
 }
 
-fn probe(at: &At<'_>) -> Option<WrittenProbe> {
-    let fields = at.fields("a probe", PROBE)?;
-    let name = fields.needed("name", "what the probe is called").and_then(|at| at.text(limit::NAME_LETTERS));
-    let distance = |key| fields.get(key).and_then(|at| at.number(&limit::DISTANCE));
-    let (from_inside_m, from_outside_m) = (distance("from_inside_m"), distance("from_outside_m"));
-    if at.has("from_inside_m") == at.has("from_outside_m") {
+/// A list that cannot be read may hold any probe: it counts as one without a name.
+fn probes(at: &At<'_>) -> Vec<WrittenProbe> {
+    let any = WrittenProbe { name: String::new(), from_inside_m: None, from_outside_m: None };
+    at.list("probes", 0, limit::PROBES).map_or_else(|| vec![any], |list| list.iter().map(probe).collect())
+}
+
+/// One that cannot be read has no name.
+fn probe(at: &At<'_>) -> WrittenProbe {
+    let fields = at.fields("a probe", PROBE);
+    let get = |key| fields.as_ref()?.get(key);
+    let name = fields.as_ref().and_then(|fields| fields.needed("name", "what the probe is called"));
+    let distance = |key| get(key).and_then(|at| at.number(&limit::DISTANCE));
+    if at.is_object() && at.has("from_inside_m") == at.has("from_outside_m") {
         let words = "exactly one of from_inside_m and from_outside_m says where the probe is".to_owned();
         at.problem(Trouble::Contradiction { words });
-        return None;
     }
-    Some(WrittenProbe { name: name?, from_inside_m, from_outside_m })
+    WrittenProbe {
+        name: name.and_then(|at| at.name(limit::NAME_LETTERS)).unwrap_or_default(),
+        from_inside_m: distance("from_inside_m"),
+        from_outside_m: distance("from_outside_m"),
+    }
 }
 
-fn condition(at: &At<'_>) -> Option<WrittenCondition> {
-    let fields = at.fields("a condition", CONDITION)?;
+/// One that cannot be read asks for nothing.
+fn condition(at: &At<'_>) -> WrittenCondition {
+    let nothing = WrittenCondition {
+        what: WrittenWhat::Mean,
+        of: None,
+        below_c: None,
+        above_c: None,
+        below_k: None,
+        below_k_per_h: None,
+    };
+    let Some(fields) = at.fields("a condition", CONDITION) else { return nothing };
     let whats = [
         ("hottest", WrittenWhat::Hottest),
         ("coldest", WrittenWhat::Coldest),
@@ -273,22 +221,27 @@ fn condition(at: &At<'_>) -> Option<WrittenCondition> {
         ("rate", WrittenWhat::Rate),
     ];
     let what = fields.needed("what", "what is watched").and_then(|at| at.word(&whats));
-    let limits: Vec<&str> = CONDITION[2..].iter().copied().filter(|key| at.has(key)).collect();
+    let of = fields.get("of").map(|at| at.line(limit::NAME_LETTERS));
+    let limits: Vec<&str> = CONDITION_LIMITS.iter().copied().filter(|key| at.has(key)).collect();
     if limits.len() != 1 {
         let words = if limits.is_empty() {
-            format!("no limit is given; one of {}", CONDITION[2..].join(", "))
+            format!("no limit is given; one of {}", CONDITION_LIMITS.join(", "))
         } else {
             format!("{} are both given; a condition has one limit", limits.join(" and "))
         };
         at.problem(Trouble::Contradiction { words });
     }
     let number = |key, limit| fields.get(key).and_then(|at| at.spread(limit));
-    Some(WrittenCondition {
-        what: what?,
-        of: fields.get("of").and_then(|at| at.text(limit::NAME_LETTERS)),
+    let condition = WrittenCondition {
+        of: of.clone().flatten(),
         below_c: number("below_c", &limit::TEMPERATURE),
         above_c: number("above_c", &limit::TEMPERATURE),
         below_k: number("below_k", &limit::DIFFERENCE),
         below_k_per_h: number("below_k_per_h", &limit::RATE),
-    })
+        ..nothing.clone()
+    };
+    match (what, of) {
+        (Some(what), None | Some(Some(_))) => WrittenCondition { what, ..condition },
+        _ => nothing,
+    }
 }

@@ -1,9 +1,9 @@
 //! What the faces see, as written.
 
-use super::at::{At, Fields};
+use super::at::{At, Fields, SPREAD};
 use super::limits as limit;
 use super::types::{OverTimeC, OverTimeFlux, WrittenFace, WrittenSurroundings};
-use crate::problem::{Limit, Trouble};
+use crate::problem::{Limit, Trouble, figure, quantity, rounded};
 
 pub(super) const SURROUNDINGS: &[&str] = &["inner", "outer"];
 pub(super) const FACE: &[&str] = &[
@@ -17,16 +17,19 @@ pub(super) const FACE: &[&str] = &[
     "radiation_to_c",
 ];
 
+/// The kinds of surroundings; a row is of one.
+pub(super) const KINDS: &[&str] = &["insulated", "held_c", "heat_flux_into_w_per_m2", "temperature_c"];
+
 /// The keys of one quantity over time: ramp, table, cycle.
-struct Keys {
-    ramp: &'static [&'static str],
-    table: &'static [&'static str],
-    cycle: &'static [&'static str],
+pub(super) struct Keys {
+    pub ramp: &'static [&'static str],
+    pub table: &'static [&'static str],
+    pub cycle: &'static [&'static str],
     value: &'static Limit,
     amplitude: &'static Limit,
 }
 
-static CELSIUS: Keys = Keys {
+pub(super) static CELSIUS: Keys = Keys {
     ramp: &["from_c", "to_c", "over_s"],
     table: &["at_s", "values_c", "repeats_every_s"],
     cycle: &["mean_c", "amplitude_k", "period_s", "highest_at_s"],
@@ -34,7 +37,7 @@ static CELSIUS: Keys = Keys {
     amplitude: &limit::AMPLITUDE,
 };
 
-static FLUX: Keys = Keys {
+pub(super) static FLUX: Keys = Keys {
     ramp: &["from_w_per_m2", "to_w_per_m2", "over_s"],
     table: &["at_s", "values_w_per_m2", "repeats_every_s"],
     cycle: &["mean_w_per_m2", "amplitude_w_per_m2", "period_s", "highest_at_s"],
@@ -51,18 +54,27 @@ enum Varying {
 
 pub(super) fn surroundings(at: &At<'_>) -> Option<WrittenSurroundings> {
     let fields = at.fields("an object with inner and outer", SURROUNDINGS)?;
-    let rows = |key| match fields.get(key) {
-        Some(at) => {
-            at.list("rows", 0, limit::ROWS)?.iter().map(face).collect::<Vec<_>>().into_iter().collect()
-        }
-        None => Some(Vec::new()),
+    let rows = |key| {
+        let list = fields.get(key).and_then(|at| at.list("rows", 0, limit::ROWS)).unwrap_or_default();
+        list.iter().map(face).collect()
     };
-    let (inner, outer) = (rows("inner"), rows("outer"));
-    Some(WrittenSurroundings { inner: inner?, outer: outer? })
+    Some(WrittenSurroundings { inner: rows("inner"), outer: rows("outer") })
 }
 
-pub(super) fn face(at: &At<'_>) -> Option<WrittenFace> {
-    let fields = at.fields("an object that says what the face sees", FACE)?;
+/// A face of earlier surroundings, which have no beginning.
+pub(super) fn earlier_face(at: &At<'_>) -> WrittenFace {
+    if let Some(from) = at.member("from_s") {
+        let words = "a steady state has no beginning; leave from_s out".to_owned();
+        from.problem(Trouble::Contradiction { words });
+    }
+    face(at)
+}
+
+/// One that cannot be read says nothing.
+fn face(at: &At<'_>) -> WrittenFace {
+    let Some(fields) = at.fields("an object that says what the face sees", FACE) else {
+        return WrittenFace::default();
+    };
     let sound = one_kind(at);
     let celsius = |key| fields.get(key).map(|at| over_time_c(&at));
     let flux = fields.get("heat_flux_into_w_per_m2").map(|at| over_time_flux(&at));
@@ -78,20 +90,19 @@ pub(super) fn face(at: &At<'_>) -> Option<WrittenFace> {
         emissivity: fields.get("emissivity").and_then(|at| at.spread(&limit::EMISSIVITY)),
         radiation_to_c: radiation.flatten(),
     };
-    sound.then_some(face)
+    if sound { face } else { WrittenFace { from_s: face.from_s, ..WrittenFace::default() } }
 }
 
 /// Exactly one kind of surroundings, and what belongs to it.
 fn one_kind(at: &At<'_>) -> bool {
-    let kinds = ["insulated", "held_c", "heat_flux_into_w_per_m2", "temperature_c"];
-    let given: Vec<&str> = kinds.into_iter().filter(|key| at.has(key)).collect();
+    let given: Vec<&str> = KINDS.iter().copied().filter(|key| at.has(key)).collect();
     let exchange = ["film_w_per_m2_k", "emissivity", "radiation_to_c"];
     let words = match given.as_slice() {
         [] if exchange.iter().any(|key| at.has(key)) => {
             "film_w_per_m2_k or emissivity without temperature_c; say how warm the surroundings are"
                 .to_owned()
         }
-        [] => format!("nothing says what the face sees; one of {}", kinds.join(", ")),
+        [] => format!("nothing says what the face sees; one of {}", KINDS.join(", ")),
         ["temperature_c"] if !at.has("film_w_per_m2_k") && !at.has("emissivity") => {
             "temperature_c needs film_w_per_m2_k or emissivity or both; held_c holds the face itself"
                 .to_owned()
@@ -152,15 +163,22 @@ fn over_time_flux(at: &At<'_>) -> Option<OverTimeFlux> {
 /// None: it is a plain number or a spread. Some(None): it could not be read.
 fn varying(at: &At<'_>, keys: &'static Keys) -> Option<Option<Varying>> {
     let has = |keys: &[&str]| keys.iter().any(|key| at.has(key));
-    if !at.is_object() || has(&["value", "low", "high"]) {
+    if !at.is_object() || has(SPREAD) {
         return None;
     }
     Some(if has(keys.table) {
         at.fields("a table over time", keys.table).and_then(|fields| table(&fields, keys))
     } else if has(keys.cycle) {
         at.fields("a cycle", keys.cycle).and_then(|fields| cycle(&fields, keys))
+    } else if has(keys.ramp) {
+        at.fields("a ramp", keys.ramp).and_then(|fields| ramp(&fields, keys))
     } else {
-        at.fields("a number, a ramp, a table or a cycle", keys.ramp).and_then(|fields| ramp(&fields, keys))
+        let [ramp, table, cycle] = [keys.ramp, keys.table, keys.cycle].map(|keys| keys.join(", "));
+        let words = format!(
+            "an object here is a number (value, low, high), a ramp ({ramp}), a table ({table}) or a cycle ({cycle})"
+        );
+        at.problem(Trouble::Contradiction { words });
+        None
     })
 }
 
@@ -175,7 +193,7 @@ fn ramp(fields: &Fields<'_>, keys: &Keys) -> Option<Varying> {
 fn table(fields: &Fields<'_>, keys: &Keys) -> Option<Varying> {
     let times = fields
         .needed(keys.table[0], "the times of the table")
-        .and_then(|at| at.ascending("times", 2, limit::TABLE_POINTS, &limit::TIME));
+        .and_then(|at| at.ascending("times", limit::TABLE_POINTS, &limit::TIME, limit::TIME_STEP));
     let values = fields
         .needed(keys.table[1], "a value for each time")
         .and_then(|at| at.numbers("values", 2, limit::TABLE_POINTS, keys.value));
@@ -189,6 +207,7 @@ fn table(fields: &Fields<'_>, keys: &Keys) -> Option<Varying> {
     if let (Some(at), Some(period)) = (&repeats, period)
         && period < length
     {
+        let (period, length) = (figure(period), figure(length));
         let words = format!("a period of {period} s is shorter than its table of {length} s");
         at.problem(Trouble::Contradiction { words });
     }
@@ -204,5 +223,13 @@ fn cycle(fields: &Fields<'_>, keys: &Keys) -> Option<Varying> {
         .and_then(|at| at.number(&limit::PERIOD));
     let highest_at =
         fields.needed(keys.cycle[3], "when it is highest").and_then(|at| at.number(&limit::WHEN));
-    Some(Varying::Cycle { mean: mean?, amplitude: amplitude?, period: period?, highest_at: highest_at? })
+    let (mean, amplitude, period, highest_at) = (mean?, amplitude?, period?, highest_at?);
+    let extremes = [("falls", rounded(mean - amplitude)), ("rises", rounded(mean + amplitude))];
+    if let Some((verb, extreme)) = extremes.into_iter().find(|(_, extreme)| !keys.value.holds(*extreme)) {
+        let words = format!("it {verb} to {}; {}", quantity(extreme, keys.value.unit), keys.value);
+        let at = fields.get(keys.cycle[1]).unwrap_or_else(|| fields.at().clone());
+        at.problem(Trouble::Contradiction { words });
+        return None;
+    }
+    Some(Varying::Cycle { mean, amplitude, period, highest_at })
 }

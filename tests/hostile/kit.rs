@@ -64,8 +64,10 @@ impl Row {
 
     /// What is not as it must be; nothing where all is well.
     pub fn fault(&self) -> Option<String> {
-        let Err(problems) = stillheat::solve(&self.text) else {
-            return Some(format!("{}: accepted", self.name));
+        let problems = match std::panic::catch_unwind(|| stillheat::solve(&self.text)) {
+            Err(_) => return Some(format!("{}: panicked", self.name)),
+            Ok(Ok(_)) => return Some(format!("{}: accepted", self.name)),
+            Ok(Err(problems)) => problems,
         };
         let mut found: Vec<&str> = problems.iter().map(|problem| problem.path.as_str()).collect();
         let mut expected: Vec<&str> = self.places.iter().map(String::as_str).collect();

@@ -310,9 +310,9 @@ pub fn layers() -> Vec<Row> {
             "/item/layers/0/conductivity_w_per_m_k/polynomial_in_c/1",
             "allowed",
         ),
-        property(polynomial(json!([1, -0.01])), CONDUCTIVITY, "it falls to -9 within its range"),
-        property(polynomial(notch), CONDUCTIVITY, "it falls to -0.0001 within its range"),
-        property(polynomial(json!([1, 10])), CONDUCTIVITY, "it rises to 10001 within its range"),
+        property(polynomial(json!([1, -0.01])), CONDUCTIVITY, "it falls to -9 W/(m K) within its range"),
+        property(polynomial(notch), CONDUCTIVITY, "it falls to -0.0001 W/(m K) within its range"),
+        property(polynomial(json!([1, 10])), CONDUCTIVITY, "it rises to 10001 W/(m K) within its range"),
         property(polynomial(json!([0, 0, 0, 0, 0, 1e12])), CONDUCTIVITY, "it"),
     ])
 }
@@ -340,11 +340,7 @@ pub fn conditions() -> Vec<Row> {
             "exactly one",
         ),
         probe(json!({ "name": "thermocouple" }), "/probes/0", "exactly one"),
-        (
-            vec![("/probes/0/name", json!(" "))],
-            vec!["/probes/0/name", "/ready_when/1/of"],
-            "a probe needs a name",
-        ),
+        (vec![("/probes/0/name", json!(" "))], vec!["/probes/0/name"], "a name that conditions can refer to"),
         (
             vec![("/probes", json!([twin("thermocouple"), twin("thermocouple")]))],
             vec!["/probes/1/name"],

@@ -78,6 +78,10 @@ pub fn no_scenario() -> Vec<Row> {
         whole(&" ".repeat(1_000_001), "1000001 bytes; at most 1000000"),
         whole(&format!("[{}1]", "1,".repeat(400_000)), "a list of 400001 found"),
     ];
+    // A long key with very many values in it costs no more than its letters.
+    let long = "k".repeat(450_000);
+    let says = "\"stillheat\": 1 says that this is a scenario";
+    rows.push(whole(&format!("{{\"{long}\": [{}1]}}", "1,".repeat(250_000)), says));
     let bare = "{\"stillheat\": 1}";
     rows.push(Row::text(bare, bare, &["/item", "/start", "/surroundings"], "missing"));
     rows
