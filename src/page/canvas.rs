@@ -51,7 +51,9 @@ impl Canvas {
 
     fn fill_with(&self, gradient: &CanvasGradient, stops: &[(f64, Colour)]) {
         for (place, colour) in stops {
-            let _ = gradient.add_color_stop(place.clamp(0.0, 1.0) as f32, &colour.css());
+            #[allow(clippy::cast_possible_truncation, reason = "a part of a gradient needs no more digits")]
+            let place = place.clamp(0.0, 1.0) as f32;
+            let _ = gradient.add_color_stop(place, &colour.css());
         }
         self.context.set_fill_style_canvas_gradient(gradient);
         self.context.fill();

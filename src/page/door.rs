@@ -157,7 +157,7 @@ impl Page {
         let Some(solved) = &self.solved else { return JsValue::NULL };
         let words = Shown::new(solved, System::Metric).moment_words(time);
         let then = solved.checked.clock.and_then(|clock| clock.after(time));
-        object(&Moment { words, iso: then.map_or_else(String::new, |then| then.iso()) })
+        object(&Moment { words, iso: then.map_or_else(String::new, crate::units::clock::Clock::iso) })
     }
 }
 

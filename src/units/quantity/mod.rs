@@ -11,7 +11,7 @@
 //! ```
 //!
 //! What is read and written:
-//! - a number and its unit; without a unit the one that is shown for the kind counts ([`unit`]);
+//! - a number and its unit; without a unit the one that is shown for the kind counts ([`unit()`]);
 //! - known roughly: `6 to 12`, `6-12`, `6 – 12`, `6..12` (the value is the middle, not the geometric mean),
 //!   `8 ± 2`, `8 +- 2`, `8 +/- 2`, `8 ± 25 %`, or all three: `8 (6 to 12)`;
 //! - units in any arrangement: `W/m²K`, `W/(m2 K)`, `W/m^2/K`; all that follows a stroke is below it;
