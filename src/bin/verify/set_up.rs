@@ -5,8 +5,6 @@ use std::path::PathBuf;
 use std::process::{Command, Stdio};
 
 const WASM: &str = "wasm32-unknown-unknown";
-/// The driver of Firefox that the tests were written with.
-const GECKODRIVER: &str = "0.36.0";
 
 /// The WebAssembly target of the toolchain.
 pub fn wasm_target() -> Result<(), Failure> {
@@ -33,11 +31,9 @@ pub fn node_modules(project: &Project) -> Result<(), Failure> {
     project.run(Command::new("npm").args(["ci", "--silent", "--prefix", "tests/browser"]))
 }
 
-/// Chromium, Firefox and their drivers.
-pub fn browsers(project: &Project) -> Result<(), Failure> {
-    package("chromium", "Chromium", &["chromium"])?;
-    package("firefox-esr", "Firefox ESR", &["firefox-esr"])?;
-    tool(project, "geckodriver", "geckodriver", GECKODRIVER).map(|_| ())
+/// The browser that the page's tests drive.
+pub fn browser() -> Result<(), Failure> {
+    package("chromium", "Chromium", &["chromium"])
 }
 
 /// The runner of tests as WebAssembly, of the version that the library has.
